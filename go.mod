@@ -1,0 +1,3 @@
+module example.org/couplet
+
+go 1.26

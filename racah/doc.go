@@ -1,0 +1,19 @@
+// Package racah computes the recoupling coefficients of three and four angular momenta, exactly:
+// Wigner's 6j and 9j symbols and Racah's W.
+//
+// # Conventions
+//
+// Every argument is a [rational.Half]. Symbols and phases are those of DLMF chapter 34; the 9j symbol
+// is given row by row. Racah's coefficient is
+//
+//	W(abcd;ef) = (-1)^(a+b+c+d) { a b e }    Edmonds (6.2.13)
+//	                            { d c f }
+//
+// A triad that breaks a selection rule gives zero; [CheckSixJ], [CheckW] and [CheckNineJ] name it, and
+// tell it from an accidental zero. A negative argument panics with *[rational.ArgumentError]; the
+// checkers return it instead. Every function is safe for concurrent use.
+//
+// # Accuracy
+//
+// Everything is exact, for arguments of any size that memory allows.
+package racah
