@@ -110,7 +110,7 @@ func (h *Half) UnmarshalText(text []byte) error {
 // ParseHalf reads an integer ("2", "-1"), a fraction over 2 ("-3/2") or a decimal that ends in .0
 // or .5 ("2.5"), with an optional sign and nothing else. The error is a *[ParseError].
 func ParseHalf(s string) (Half, error) {
-	const allowed = "an integer or a half, as 2, -3/2 or 2.5"
+	const allowed = "an integer or a half, as 2, -3/2 or 2.5, at most 2147483647/2"
 	digits, twice := s, int64(2)
 	half := int64(0)
 	if d, ok := strings.CutSuffix(s, "/2"); ok {
@@ -125,14 +125,14 @@ func ParseHalf(s string) (Half, error) {
 	}
 	n, err := strconv.ParseInt(digits, 10, 32)
 	if err != nil {
-		return Half{}, &ParseError{"rational.ParseHalf", s, 0, allowed + ", of at most 2147483647/2"}
+		return Half{}, &ParseError{"rational.ParseHalf", s, 0, allowed}
 	}
 	if digits[0] == '-' {
 		half = -half
 	}
 	v := twice*n + half
 	if v < -maxTwice || v > maxTwice {
-		return Half{}, &ParseError{"rational.ParseHalf", s, 0, allowed + ", of at most 2147483647/2"}
+		return Half{}, &ParseError{"rational.ParseHalf", s, 0, allowed}
 	}
 	return Half{int32(v)}, nil
 }

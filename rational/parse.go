@@ -21,7 +21,7 @@ func (e *ParseError) Error() string {
 
 // ParseSurd reads a number r*sqrt(n): products and quotients, by * and /, of integers, decimals
 // and sqrt(a) or sqrt(a/b), with sums of such where they come to a single term. Spaces are free.
-// It reads all that [Surd.String] writes, and "sqrt(2/7)", "3/sqrt(2)", "2.5".
+// It reads all that [Surd.String] writes within the limits below, and "sqrt(2/7)", "3/sqrt(2)", "2.5".
 //
 // A radicand must be factored for the canonical form. Its numerator and denominator may have up to
 // 2^17 bits each, as long as what is left of them after division by all primes below 2^16 is less
