@@ -1,0 +1,149 @@
+package racah_test
+
+import (
+	"errors"
+	"fmt"
+	"testing"
+
+	"example.org/couplet/racah"
+	"example.org/couplet/rational"
+	"example.org/couplet/wigner"
+)
+
+func recovered(f func()) (e *rational.ArgumentError) {
+	defer func() {
+		if r := recover(); r != nil {
+			e = r.(*rational.ArgumentError)
+		}
+	}()
+	f()
+	return nil
+}
+
+// wantRule returns the first rule that a triad breaks, by the definition.
+func wantRule(triads ...[3]int) wigner.Rule {
+	for _, t := range triads {
+		if (t[0]+t[1]+t[2])%2 != 0 {
+			return wigner.HalfIntegerSum
+		}
+		if t[0] > t[1]+t[2] || t[1] > t[0]+t[2] || t[2] > t[0]+t[1] {
+			return wigner.Triangle
+		}
+	}
+	return wigner.NonZero
+}
+
+// All 6j symbols with arguments from -1/2 to 2, allowed or not, and the W coefficients of the same
+// arguments: Edmonds (6.2.13) joins the two.
+func TestCheckSixJAndW(t *testing.T) {
+	counts := map[wigner.Rule]int{}
+	for n := range 6 * 6 * 6 * 6 * 6 * 6 {
+		var q [6]int
+		bad := false
+		for i := range q {
+			q[i] = n%6 - 1
+			n /= 6
+			bad = bad || q[i] < 0
+		}
+		a, b, c, d, e, f := h(q[0]), h(q[1]), h(q[2]), h(q[3]), h(q[4]), h(q[5])
+		var value, w rational.Surd
+		panic6j := recovered(func() { value = racah.SixJ(a, b, c, d, e, f) })
+		panicW := recovered(func() { w = racah.W(a, b, e, d, c, f) })
+		verdict, err := racah.CheckSixJ(a, b, c, d, e, f)
+		verdictW, errW := racah.CheckW(a, b, e, d, c, f)
+		if bad != (panic6j != nil) || bad != (panicW != nil) || bad != (err != nil) || bad != (errW != nil) {
+			t.Fatalf("%v (halves): panics %v, %v, errors %v, %v", q, panic6j, panicW, err, errW)
+		}
+		if bad {
+			continue
+		}
+		want := wantRule([3]int{q[0], q[1], q[2]}, [3]int{q[0], q[4], q[5]}, [3]int{q[3], q[1], q[5]}, [3]int{q[3], q[4], q[2]})
+		if want == wigner.NonZero && value.IsZero() {
+			want = wigner.Accidental
+		}
+		if verdict.Rule != want || verdictW.Rule != want || verdict.Zero() != value.IsZero() {
+			t.Fatalf("%v (halves): value %v, verdicts %v, %v, want %v", q, value, verdict, verdictW, want)
+		}
+		if (q[0]+q[1]+q[4]+q[3])/2%2 != 0 && !value.IsZero() {
+			w = w.Neg()
+		}
+		if !w.Equal(value) {
+			t.Fatalf("%v (halves): 6j %v, W with its phase %v", q, value, w)
+		}
+		counts[want]++
+	}
+	t.Log(counts)
+	if counts[wigner.NonZero] < 500 || counts[wigner.Accidental] == 0 {
+		t.Errorf("the domain misses a kind: %v", counts)
+	}
+}
+
+func TestCheckNineJ(t *testing.T) {
+	counts := map[wigner.Rule]int{}
+	nineJs(4, func(q [9]int) {
+		verdict, err := racah.CheckNineJ(h(q[0]), h(q[1]), h(q[2]), h(q[3]), h(q[4]), h(q[5]), h(q[6]), h(q[7]), h(q[8]))
+		if err != nil || verdict.Zero() != nineJValue(q).IsZero() {
+			t.Fatalf("%v (halves): %v, %v, value %v", q, verdict, err, nineJValue(q))
+		}
+		counts[verdict.Rule]++
+	})
+	t.Log(counts)
+	if counts[wigner.NonZero] == 0 || counts[wigner.Symmetry] == 0 || counts[wigner.Accidental] == 0 {
+		t.Errorf("the domain misses a kind: %v", counts)
+	}
+}
+
+func TestVerdictsAndPanics(t *testing.T) {
+	i := rational.Int
+	v, err := racah.CheckSixJ(i(1), i(1), i(3), i(1), i(1), i(1))
+	if err != nil || v.String() != "zero: triangle rule broken (j1 j2 j3)" {
+		t.Errorf("%v, %v", v, err)
+	}
+	v, err = racah.CheckW(i(1), i(1), i(1), i(1), i(1), h(1))
+	if err != nil || v.String() != "zero: the sum of a triad is half-integral (a c f)" {
+		t.Errorf("%v, %v", v, err)
+	}
+	v, err = racah.CheckNineJ(i(1), i(1), i(1), i(1), i(1), i(1), i(1), i(1), i(3))
+	if err != nil || v.String() != "zero: triangle rule broken (g h i)" {
+		t.Errorf("%v, %v", v, err)
+	}
+	// Two equal rows, and an odd sum.
+	v, err = racah.CheckNineJ(i(1), i(1), i(1), i(1), i(1), i(1), i(1), i(1), i(1))
+	if err != nil || v.Rule != wigner.Symmetry {
+		t.Errorf("%v, %v", v, err)
+	}
+	for want, f := range map[string]func(){
+		"racah.SixJ: l2 = -1; allowed: an integer or half-integer >= 0": func() { racah.SixJ(i(1), i(1), i(1), i(1), i(-1), i(1)) },
+		"racah.W: c = -1/2; allowed: an integer or half-integer >= 0":   func() { racah.W(i(1), i(1), h(-1), i(1), i(1), i(1)) },
+		"racah.NineJ: h = -1; allowed: an integer or half-integer >= 0": func() { racah.NineJ(i(1), i(1), i(1), i(1), i(1), i(1), i(1), i(-1), i(1)) },
+		"racah.CheckNineJ: a = -1; allowed: an integer or half-integer >= 0": func() {
+			_, err := racah.CheckNineJ(i(-1), i(1), i(1), i(1), i(1), i(1), i(1), i(1), i(1))
+			var e *rational.ArgumentError
+			errors.As(err, &e)
+			panic(e)
+		},
+	} {
+		if e := recovered(f); e == nil || e.Error() != want {
+			t.Errorf("panic %v, want %s", e, want)
+		}
+	}
+}
+
+func ExampleSixJ() {
+	i := rational.Int
+	fmt.Println(racah.SixJ(i(2), i(2), i(1), rational.Halves(1), rational.Halves(1), rational.Halves(3)))
+	fmt.Println(racah.CheckSixJ(i(2), i(2), i(2), rational.Halves(3), rational.Halves(3), rational.Halves(3)))
+	// Output:
+	// -1/10*sqrt(5)
+	// accidental zero: no rule forbids it <nil>
+}
+
+func ExampleNineJ() {
+	// How much of the LS-coupled state 3P1 of an s and a p electron is (1/2, 3/2) in jj coupling? The
+	// coefficient is a 9j symbol times sqrt((2S+1)(2L+1)(2j1+1)(2j2+1)).
+	i, half := rational.Int, rational.Halves(1)
+	nine := racah.NineJ(half, half, i(1), i(0), i(1), i(1), half, rational.Halves(3), i(1))
+	coefficient := nine.Mul(rational.Root(3*3*2*4, 1))
+	fmt.Println(coefficient, coefficient.Square())
+	// Output: 1/3*sqrt(3) 1/3
+}
