@@ -94,14 +94,19 @@ func (s *Sum) Word() (value int64, ok bool) {
 }
 
 // Int sets z to S and returns it.
-//
-// The first term is multiplied together from its primes. Every further one follows from the one
-// before by a multiplication and an exact division by a word or two, so that the cost is
-// proportional to Terms times the length of S.
 func (s *Sum) Int(z *big.Int) *big.Int {
 	if v, ok := s.Word(); ok {
 		return z.SetInt64(v)
 	}
+	return s.long(z)
+}
+
+// long is Int by as many words as it takes.
+//
+// The first term is multiplied together from its primes. Every further one follows from the one
+// before by a multiplication and an exact division by a word or two, so that the cost is
+// proportional to Terms times the length of S.
+func (s *Sum) long(z *big.Int) *big.Int {
 	width := s.Bits/bits.UintSize + 2 // room for the sign, and for a word before it is divided out
 	var stack [2 * stackWidth]big.Word
 	words := stack[:]

@@ -5,9 +5,13 @@ package published
 
 import (
 	"encoding/csv"
+	"fmt"
+	"maps"
+	"math/big"
 	"os"
 	"path/filepath"
 	"sort"
+	"strconv"
 	"testing"
 
 	"example.org/couplet/rational"
@@ -86,6 +90,16 @@ func (r Row) Half(column string) rational.Half {
 	return h
 }
 
+// Halves returns the quantum numbers of several columns.
+func (r Row) Halves(columns ...string) []rational.Half {
+	r.t.Helper()
+	q := make([]rational.Half, len(columns))
+	for i, column := range columns {
+		q[i] = r.Half(column)
+	}
+	return q
+}
+
 // SignedRoot returns sign*sqrt(num/den) from the columns of these names.
 func (r Row) SignedRoot() rational.Surd {
 	r.t.Helper()
@@ -100,6 +114,24 @@ func (r Row) SignedRoot() rational.Surd {
 		return root.Neg()
 	}
 	return rational.Surd{}
+}
+
+// Agrees reports whether v = sign*sqrt(num/den), from the columns of these names. It compares squares,
+// so that no number need be factored.
+func (r Row) Agrees(v rational.Surd) bool {
+	r.t.Helper()
+	square, ok := new(big.Rat).SetString(r.Text("num") + "/" + r.Text("den"))
+	if !ok {
+		r.t.Fatalf("num/den = %s/%s", r.Text("num"), r.Text("den"))
+	}
+	return v.Square().Cmp(square) == 0 && strconv.Itoa(v.Sign()) == r.Text("sign")
+}
+
+// String returns the fields that are not empty, by column.
+func (r Row) String() string {
+	fields := maps.Clone(r.fields)
+	maps.DeleteFunc(fields, func(_, v string) bool { return v == "" })
+	return fmt.Sprint(fields)
 }
 
 // Counter counts rows by where they come from and how.

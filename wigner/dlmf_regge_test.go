@@ -1,0 +1,38 @@
+package wigner_test
+
+// The symmetries, (34.3.11) and (34.3.12) those of Regge. Arguments are given as twice their values;
+// j2+j3+m1 and its like are even then, and their halves stand for momenta and projections.
+var threeJSymmetries = []identity{
+	{"34.3.8", 500000, 95, func(c *tally) { // cyclic permutations of the columns
+		threeJs(20, func(j1, j2, j3, m1, m2, m3 int) {
+			value := threeJ(j1, j2, j3, m1, m2, m3)
+			c.surds(threeJ(j2, j3, j1, m2, m3, m1), value, j1, j2, j3, m1, m2, m3)
+			c.surds(threeJ(j3, j1, j2, m3, m1, m2), value, j1, j2, j3, m1, m2, m3)
+		})
+	}},
+	{"34.3.9", 250000, 95, func(c *tally) { // exchange of two columns
+		threeJs(20, func(j1, j2, j3, m1, m2, m3 int) {
+			image := signed(j1+j2+j3, threeJ(j2, j1, j3, m2, m1, m3))
+			c.surds(threeJ(j1, j2, j3, m1, m2, m3), image, j1, j2, j3, m1, m2, m3)
+		})
+	}},
+	{"34.3.10", 250000, 95, func(c *tally) { // all projections reversed
+		threeJs(20, func(j1, j2, j3, m1, m2, m3 int) {
+			image := signed(j1+j2+j3, threeJ(j1, j2, j3, -m1, -m2, -m3))
+			c.surds(threeJ(j1, j2, j3, m1, m2, m3), image, j1, j2, j3, m1, m2, m3)
+		})
+	}},
+	{"34.3.11", 250000, 95, func(c *tally) {
+		threeJs(20, func(j1, j2, j3, m1, m2, m3 int) {
+			image := threeJ(j1, (j2+j3+m1)/2, (j2+j3-m1)/2, j2-j3, (j3-j2+m1)/2+m2, (j3-j2+m1)/2+m3)
+			c.surds(threeJ(j1, j2, j3, m1, m2, m3), image, j1, j2, j3, m1, m2, m3)
+		})
+	}},
+	{"34.3.12", 250000, 95, func(c *tally) {
+		threeJs(20, func(j1, j2, j3, m1, m2, m3 int) {
+			image := threeJ((j1+j2-m3)/2, (j2+j3-m1)/2, (j1+j3-m2)/2,
+				j3-(j1+j2+m3)/2, j1-(j2+j3+m1)/2, j2-(j1+j3+m2)/2)
+			c.surds(threeJ(j1, j2, j3, m1, m2, m3), image, j1, j2, j3, m1, m2, m3)
+		})
+	}},
+}
