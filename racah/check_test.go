@@ -147,3 +147,38 @@ func ExampleNineJ() {
 	fmt.Println(coefficient, coefficient.Square())
 	// Output: 1/3*sqrt(3) 1/3
 }
+
+// Whatever the arguments, a malformed one panics with an *ArgumentError, all others give a value within
+// the bound of the orthogonality relation, DLMF (34.5.14), that the checker and an image under Regge's
+// symmetry, DLMF (34.5.9), agree with.
+func FuzzSixJ(f *testing.F) {
+	f.Add(4, 4, 4, 3, 3, 3)
+	f.Add(2, 2, 2, 2, 2, 2)
+	f.Add(-1, 2, 2, 2, 2, 2)
+	f.Add(100, 90, 80, 100, 90, 80)
+	f.Fuzz(func(t *testing.T, a, b, c, d, e, f int) {
+		if max(a, b, c, d, e, f) > 300 || min(a, b, c, d, e, f) < -300 {
+			t.Skip()
+		}
+		q := [6]int{a, b, c, d, e, f}
+		var value rational.Surd
+		bad := recovered(func() { value = sixJValue(q) })
+		verdict, err := racah.CheckSixJ(h(a), h(b), h(c), h(d), h(e), h(f))
+		if (bad != nil) != (err != nil) || bad == nil && verdict.Zero() != value.IsZero() {
+			t.Fatalf("%v (halves): %v, panic %v, error %v, verdict %v", q, value, bad, err, verdict)
+		}
+		if bad != nil || verdict.Zero() && verdict.Rule != wigner.Accidental {
+			return
+		}
+		for _, image := range sixJImages(q) {
+			if got := sixJValue(image); !got.Equal(value) {
+				t.Fatalf("%v (halves): %v, image %v: %v", q, value, image, got)
+			}
+		}
+		for i := range 3 {
+			if value.Abs().Cmp(rational.Root(1, int64(q[i]+1)*int64(q[i+3]+1))) > 0 {
+				t.Fatalf("%v (halves): %v is too large", q, value)
+			}
+		}
+	})
+}

@@ -1,6 +1,7 @@
 package rational
 
 import (
+	"cmp"
 	"math"
 	"strconv"
 	"strings"
@@ -62,15 +63,7 @@ func (h Half) Neg() Half { return Half{-h.twice} }
 func (h Half) Abs() Half { return Half{max(h.twice, -h.twice)} }
 
 // Cmp returns -1, 0 or +1 as h is less than, equal to or greater than k.
-func (h Half) Cmp(k Half) int {
-	switch {
-	case h.twice < k.twice:
-		return -1
-	case h.twice > k.twice:
-		return 1
-	}
-	return 0
-}
+func (h Half) Cmp(k Half) int { return cmp.Compare(h.twice, k.twice) }
 
 // Surd returns h as a Surd.
 func (h Half) Surd() Surd { return Ratio(int64(h.twice), 2) }

@@ -44,7 +44,7 @@ func countTo(primes []uint32, n uint32) int {
 
 // sieve returns the primes up to n >= 2 (Eratosthenes, odd numbers only).
 func sieve(n uint32) []uint32 {
-	half := uint64(n+1) / 2 // entry i stands for 2i+1
+	half := (uint64(n) + 1) / 2 // entry i stands for 2i+1
 	composite := make([]bool, half)
 	for i := uint64(1); (2*i+1)*(2*i+1) <= uint64(n); i++ {
 		if composite[i] {

@@ -1,6 +1,7 @@
 package rational
 
 import (
+	"cmp"
 	"math/big"
 )
 
@@ -161,13 +162,7 @@ func (s Sum) conjugate() Sum {
 // cmpRadicand compares the radicands of two non-zero surds.
 func cmpRadicand(s, t Surd) int {
 	if s.wide == nil && t.wide == nil {
-		switch {
-		case s.rad < t.rad:
-			return -1
-		case s.rad > t.rad:
-			return 1
-		}
-		return 0
+		return cmp.Compare(s.rad, t.rad)
 	}
 	_, _, a := s.parts()
 	_, _, b := t.parts()

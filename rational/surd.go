@@ -1,6 +1,7 @@
 package rational
 
 import (
+	"cmp"
 	"fmt"
 	"math"
 	"math/big"
@@ -122,13 +123,7 @@ func (s Surd) Sign() int {
 	if s.wide != nil {
 		return s.wide.num.Sign()
 	}
-	switch {
-	case s.num < 0:
-		return -1
-	case s.num > 0:
-		return 1
-	}
-	return 0
+	return cmp.Compare(s.num, 0)
 }
 
 // IsZero reports whether s = 0.
@@ -195,7 +190,7 @@ func (s Surd) Equal(t Surd) bool {
 // Cmp returns -1, 0 or +1 as s is less than, equal to or greater than t.
 func (s Surd) Cmp(t Surd) int {
 	if a, b := s.Sign(), t.Sign(); a != b || a == 0 {
-		return Int(a).Cmp(Int(b))
+		return cmp.Compare(a, b)
 	}
 	return s.Square().Cmp(t.Square()) * s.Sign()
 }

@@ -1,9 +1,10 @@
 package wigner_test
 
-// The symmetries, (34.3.11) and (34.3.12) those of Regge. Arguments are given as twice their values;
-// j2+j3+m1 and its like are even then, and their halves stand for momenta and projections.
+// DLMF version 1.2.4, section 34.3(ii): the symmetries, (34.3.11) and (34.3.12) those of Regge.
+// Arguments are given as twice their values; j2+j3+m1 and its like are even then, and their halves
+// stand for momenta and projections.
 var threeJSymmetries = []identity{
-	{"34.3.8", 500000, 95, func(c *tally) { // cyclic permutations of the columns
+	{"34.3.8", 510000, 95, func(c *tally) { // cyclic permutations of the columns
 		threeJs(20, func(j1, j2, j3, m1, m2, m3 int) {
 			value := threeJ(j1, j2, j3, m1, m2, m3)
 			c.surds(threeJ(j2, j3, j1, m2, m3, m1), value, j1, j2, j3, m1, m2, m3)

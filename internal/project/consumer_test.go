@@ -12,34 +12,34 @@ import (
 	"example.org/couplet/internal/published"
 )
 
-const consumer = `package main
-
-import (
-	"fmt"
-
-	"example.org/couplet/rational"
-	"example.org/couplet/wigner"
-)
-
-func main() {
-	half, one := rational.Halves(1), rational.Int(1)
-	fmt.Println(wigner.ClebschGordan(one, rational.Int(0), half, half, rational.Halves(3), half))
+// readmeProgram returns the program in README.md, and what the block after it says that it prints.
+func readmeProgram(t *testing.T) (program, output string) {
+	t.Helper()
+	text, err := os.ReadFile(filepath.Join(published.Root(t), "README.md"))
+	if err != nil {
+		t.Fatal(err)
+	}
+	m := regexp.MustCompile("(?s)```go\n(.*?)```.*?```\n(.*?)```").FindStringSubmatch(string(text))
+	if m == nil {
+		t.Fatal("README.md has no program with its output")
+	}
+	return m[1], m[2]
 }
-`
 
-// A module outside, which knows this one by a replace line only, builds, runs, and pays less than a
-// millisecond for the import.
+// A module outside, which knows this one by a replace line only, builds and runs the program of
+// README.md, and its start computes nothing.
 func TestOutsideModule(t *testing.T) {
 	if testing.Short() {
 		t.Skip("builds a program")
 	}
+	source, want := readmeProgram(t)
 	dir := t.TempDir()
 	write := func(name, text string) {
 		if err := os.WriteFile(filepath.Join(dir, name), []byte(text), 0o644); err != nil {
 			t.Fatal(err)
 		}
 	}
-	write("main.go", consumer)
+	write("main.go", source)
 	write("go.mod", "module example.net/consumer\n\ngo 1.26\n\nrequire example.org/couplet v0.0.0\n\nreplace example.org/couplet => "+
 		strconv.Quote(published.Root(t))+"\n")
 	program := filepath.Join(dir, "consumer.exe")
@@ -54,8 +54,8 @@ func TestOutsideModule(t *testing.T) {
 	var trace strings.Builder
 	run.Stderr = &trace
 	out, err := run.Output()
-	if err != nil || string(out) != "1/3*sqrt(6)\n" {
-		t.Fatalf("printed %q, %v", out, err)
+	if err != nil || string(out) != want {
+		t.Fatalf("printed %q, %v; README.md says %q", out, err, want)
 	}
 	// "init internal/bytealg @0.008 ms, 0 ms clock, 0 bytes, 0 allocs"
 	line := regexp.MustCompile(`(?m)^init (\S+) @\S+ ms, (\S+) ms clock, (\d+) bytes`)

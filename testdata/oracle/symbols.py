@@ -90,10 +90,12 @@ def top_of(n, large):
 
 
 def main():
-    print("# Coupling coefficients for random allowed arguments, value = sign*sqrt(num/den).")
-    print("# Tool: SymPy %s (sympy.physics.wigner) under Python %s; made by symbols.py in this folder, seed %d." % (sympy.__version__, platform.python_version(), SEED))
+    print("# Coupling coefficients for random allowed arguments, value = sign*sqrt(num/den); zero is 0,0,1.")
+    print("# Tool: SymPy %s (sympy.physics.wigner) under Python %s, seed %d." % (sympy.__version__, platform.python_version(), SEED))
+    print("# Made by: /usr/bin/python3 symbols.py > symbols.csv, in this folder.")
     print("# 3j: j1 j2 j3 m1 m2 m3; cg: j1 m1 j2 m2 j m; 6j: row by row; w: a b c d e f of W(abcd;ef); 9j: row by row;")
-    print("# gaunt: l1 m1 l2 m2 l3 m3, in units of 1/sqrt(4 pi). j to 30; 9j to 12, 60 of them to 30.")
+    print("# gaunt: l1 m1 l2 m2 l3 m3, no function conjugated, in units of 1/sqrt(4 pi). Condon-Shortley phases.")
+    print("# j is drawn up to a limit between 5 and 30, for most 9j between 5 and 12.")
     print("symbol,a1,a2,a3,a4,a5,a6,a7,a8,a9,sign,num,den")
     for name, compute in (("3j", value_3j), ("cg", value_cg), ("6j", value_6j), ("w", value_w), ("9j", value_9j), ("gaunt", value_gaunt)):
         for n in range(COUNT):
