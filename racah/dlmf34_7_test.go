@@ -1,8 +1,6 @@
 package racah_test
 
-import (
-	"example.org/couplet/rational"
-)
+import "example.org/couplet/rational"
 
 // DLMF version 1.2.4, sections 34.6 and 34.7.
 var nineJIdentities = []identity{
