@@ -12,12 +12,12 @@ import (
 // NineJ returns the exact Wigner 9j symbol, its arguments given row by row:
 //
 //	{ a b c }
-//	{ d e f } = Σ_x (-1)^(2x) (2x+1) { a b c } { d e f } { g h i }    DLMF (34.6.2)
+//	{ d e f } = Σ_x (-1)^(2x) (2x+1) { a b c } { d e f } { g h i }
 //	{ g h i }                        { f i x } { b x h } { x a d }
 //
-// Each 6j symbol is written as in [SixJ], with the triads (a i x), (b x f), (x h d) in the part of abc
-// there. All triangle coefficients that depend on x cancel, and those of the rows and columns of the
-// 9j symbol stand before a sum of integers.
+// which is DLMF (34.6.2) for the transposed symbol. The three 6j symbols are written as in [SixJ], with
+// the triads (a i x), (b x f) and (x h d) in front of their sums. Then all triangle coefficients that
+// depend on x cancel, and those of the rows and columns of the 9j symbol stand before a sum of integers.
 //
 // It is zero where a row or a column breaks a selection rule; [CheckNineJ] says which. It panics with
 // *rational.ArgumentError for a negative argument.

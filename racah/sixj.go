@@ -12,8 +12,9 @@ import (
 //	{ j1 j2 j3 }
 //	{ l1 l2 l3 }
 //
-// by Racah's sum, DLMF (34.4.2), written with binomials. With a, b, c one of the four triads, d, e, f
-// the momenta opposite to them, Δ the triangle coefficient of DLMF (34.2.5) and s(xyz) = x+y+z it is
+// by Racah's sum, DLMF (34.4.2), written with binomials. With (a b c) the one of the four triads with the
+// largest sum (any of them would do), d, e, f the momenta opposite to a, b, c in the symbol, Δ the
+// triangle coefficient of DLMF (34.2.5) and s(xyz) = x+y+z it is
 //
 //	Δ(aef) Δ(dbf) Δ(dec) / Δ(abc) Σ_t (-1)^t C(t+1, s(abc)+1) C(a+b-c, t-s(dec)) C(b+c-a, t-s(aef)) C(c+a-b, t-s(dbf))
 //

@@ -56,8 +56,9 @@ func (v Verdict) String() string {
 	return v.Rule.String() + " (" + v.Args + ")"
 }
 
-// Triad returns NonZero where a, b and c, all >= 0, can couple to zero: their sum is an integer and
-// |a-b| <= c <= a+b. Otherwise it returns the rule that is broken, HalfIntegerSum or Triangle.
+// Triad returns NonZero where a, b and c can couple to zero: their sum is an integer and
+// |a-b| <= c <= a+b. Otherwise it returns the rule that is broken, HalfIntegerSum or Triangle. No
+// argument is malformed here: a negative one breaks one of the two rules.
 func Triad(a, b, c rational.Half) Rule {
 	// 64 bits hold the sums of Halves on every platform.
 	x, y, z := int64(a.Twice()), int64(b.Twice()), int64(c.Twice())
