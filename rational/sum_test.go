@@ -149,7 +149,7 @@ func TestSumFloat64(t *testing.T) {
 }
 
 func TestComplexArithmetic(t *testing.T) {
-	parts := sums(12)
+	parts := sums(8)
 	var list []rational.Complex
 	for i, re := range parts {
 		list = append(list, rational.Complex{Re: re, Im: parts[(5*i+3)%len(parts)]}, rational.Complex{Im: re})
