@@ -4,6 +4,7 @@ import (
 	"math/big"
 
 	"example.org/couplet/internal/argument"
+	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/square"
 	"example.org/couplet/rational"
 	"example.org/couplet/wigner"
@@ -106,6 +107,7 @@ func nineJSum(z *big.Int, t *square.Array) *big.Int {
 	first := max(distance(a, i), distance(b, f), distance(d, h))
 	last := min(a+i, b+f, d+h)
 	term, factor := new(big.Int), new(big.Int)
+	var s binsum.Quadruple
 	for x := first; x <= last; x += 2 { // twice the x of the formula
 		factors := [3]tetrad{
 			{a, i, x, f, b, c}, // { a b c; f i x } with its triad (a i x) in front
@@ -114,7 +116,7 @@ func nineJSum(z *big.Int, t *square.Array) *big.Int {
 		}
 		term.SetInt64(int64(x + 1))
 		for n := range factors {
-			s := factors[n].sum()
+			factors[n].sum(&s)
 			term.Mul(term, s.Int(factor))
 		}
 		z.Add(z, term)

@@ -22,8 +22,12 @@ import (
 // selection rule; [CheckSixJ] says which. It panics with *rational.ArgumentError for a negative
 // argument. Any size is allowed; time grows like the size times the number of terms.
 func SixJ(j1, j2, j3, l1, l2, l3 rational.Half) rational.Surd {
-	q := sixJ{fn: "racah.SixJ", names: &sixJNames, j: [6]rational.Half{j1, j2, j3, l1, l2, l3}}
-	return q.exact(0)
+	var k tetrad
+	if !k.set(j1, j2, j3, l1, l2, l3) {
+		forbidden("racah.SixJ", &sixJNames, j1, j2, j3, l1, l2, l3)
+		return rational.Surd{}
+	}
+	return k.exact()
 }
 
 // W returns the exact Racah coefficient W(abcd;ef), which by Edmonds (6.2.13) is
@@ -34,8 +38,21 @@ func SixJ(j1, j2, j3, l1, l2, l3 rational.Half) rational.Surd {
 // It is zero where one of the triads (a b e), (a c f), (d b f), (d c e) breaks a selection rule;
 // [CheckW] says which. It panics with *rational.ArgumentError for a negative argument.
 func W(a, b, c, d, e, f rational.Half) rational.Surd {
-	q := sixJ{fn: "racah.W", names: &wNames, j: [6]rational.Half{a, b, e, d, c, f}}
-	return q.exact((a.Twice() + b.Twice() + c.Twice() + d.Twice()) / 2)
+	var k tetrad
+	if !k.set(a, b, e, d, c, f) {
+		forbidden("racah.W", &wNames, a, b, e, d, c, f)
+		return rational.Surd{}
+	}
+	v := k.exact()
+	if wPhase(a, b, c, d) {
+		return v.Neg()
+	}
+	return v
+}
+
+// wPhase reports whether (-1)^(a+b+c+d) = -1; the sum is an integer for an allowed coefficient.
+func wPhase(a, b, c, d rational.Half) bool {
+	return (a.Twice()+b.Twice()+c.Twice()+d.Twice())&2 != 0
 }
 
 // CheckSixJ tells why the 6j symbol of [SixJ] vanishes, or that it does not: the first triad that
@@ -52,7 +69,7 @@ func CheckW(a, b, c, d, e, f rational.Half) (wigner.Verdict, error) {
 	return q.verdict()
 }
 
-// sixJ is a 6j symbol on its way from arguments to value: j1 j2 j3 l1 l2 l3.
+// sixJ is a 6j symbol by its arguments j1 j2 j3 l1 l2 l3, for whoever must tell what is wrong with them.
 type sixJ struct {
 	fn    string
 	names *[6]string
@@ -64,14 +81,8 @@ var (
 	wNames    = [6]string{"a", "b", "e", "d", "c", "f"} // in the places of the 6j symbol
 )
 
-// sixJTriads are the places of the momenta that couple to zero, each followed by the places of the
-// momenta opposite to them.
-var sixJTriads = [4][6]int{
-	{0, 1, 2, 3, 4, 5},
-	{0, 4, 5, 3, 1, 2},
-	{3, 1, 5, 0, 4, 2},
-	{3, 4, 2, 0, 1, 5},
-}
+// sixJTriads are the places of the momenta that couple to zero.
+var sixJTriads = [4][3]int{{0, 1, 2}, {0, 4, 5}, {3, 1, 5}, {3, 4, 2}}
 
 // rule returns the first selection rule that is broken, or an error for a malformed argument.
 func (q *sixJ) rule() (wigner.Verdict, *rational.ArgumentError) {
@@ -93,69 +104,82 @@ func (q *sixJ) verdict() (wigner.Verdict, error) {
 	if err != nil {
 		return v, err
 	}
-	if !v.Zero() && q.exact(0).IsZero() {
+	if v.Zero() {
+		return v, nil
+	}
+	var k tetrad
+	if k.set(q.j[0], q.j[1], q.j[2], q.j[3], q.j[4], q.j[5]); k.exact().IsZero() {
 		v = wigner.Verdict{Rule: wigner.Accidental}
 	}
 	return v, nil
 }
 
-// exact returns (-1)^phase times the symbol.
-func (q *sixJ) exact(phase int) rational.Surd {
-	if v, err := q.rule(); err != nil {
+// forbidden panics for a malformed argument.
+func forbidden(fn string, names *[6]string, j1, j2, j3, l1, l2, l3 rational.Half) {
+	q := sixJ{fn, names, [6]rational.Half{j1, j2, j3, l1, l2, l3}}
+	if _, err := q.rule(); err != nil {
 		panic(err)
-	} else if v.Zero() {
-		return rational.Surd{}
 	}
-	var k tetrad
-	k.set(&q.j)
-	sum := k.sum()
-	if phase&1 != 0 {
-		sum.Negative = !sum.Negative
-	}
-	var front rational.Factored // squared
-	mulTriangle(&front, k.a, k.b, k.c, -1)
-	mulTriangle(&front, k.a, k.e, k.f, 1)
-	mulTriangle(&front, k.d, k.b, k.f, 1)
-	mulTriangle(&front, k.d, k.e, k.c, 1)
-	return sum.Sqrt(&front)
 }
 
 // tetrad holds twice the arguments of an allowed 6j symbol {a b c; d e f}, the triad abc being the
 // one that its sum treats apart.
 type tetrad struct{ a, b, c, d, e, f int }
 
-// set takes the triad with the largest sum for abc: the sum then starts at t = a+b+c, where its
-// first binomial is 1, and stays smallest.
-func (k *tetrad) set(j *[6]rational.Half) {
-	best, most := 0, -1
-	for i, t := range &sixJTriads {
-		if s := j[t[0]].Twice() + j[t[1]].Twice() + j[t[2]].Twice(); s > most {
-			best, most = i, s
-		}
+// set takes the symbol {j1 j2 j3; l1 l2 l3}, with the triad of the largest sum for abc: the sum then
+// starts at t = a+b+c, where its first binomial is 1, and stays smallest. It returns false for a symbol
+// that a selection rule forbids and for a negative argument.
+func (k *tetrad) set(j1, j2, j3, l1, l2, l3 rational.Half) bool {
+	// 64 bits hold the sums of Halves on every platform.
+	a, b, c := int64(j1.Twice()), int64(j2.Twice()), int64(j3.Twice())
+	d, e, f := int64(l1.Twice()), int64(l2.Twice()), int64(l3.Twice())
+	abc, aef, dbf, dec := a+b+c, a+e+f, d+b+f, d+e+c
+	if (abc-2*a)|(abc-2*b)|(abc-2*c)|(aef-2*a)|(aef-2*e)|(aef-2*f)|
+		(dbf-2*d)|(dbf-2*b)|(dbf-2*f)|(dec-2*d)|(dec-2*e)|(dec-2*c) < 0 || (abc|aef|dbf|dec)&1 != 0 {
+		return false
 	}
-	t := &sixJTriads[best]
-	*k = tetrad{j[t[0]].Twice(), j[t[1]].Twice(), j[t[2]].Twice(), j[t[3]].Twice(), j[t[4]].Twice(), j[t[5]].Twice()}
+	// Turning two columns upside down puts another triad in front. The choice is random to a processor:
+	// a table is faster than a branch.
+	best, most := 0, abc
+	if aef > most {
+		best, most = 1, aef
+	}
+	if dbf > most {
+		best, most = 2, dbf
+	}
+	if dec > most {
+		best = 3
+	}
+	j, p := [8]int64{a, b, c, d, e, f}, &sixJOrders[best]
+	k.a, k.b, k.c = int(j[p[0]&7]), int(j[p[1]&7]), int(j[p[2]&7])
+	k.d, k.e, k.f = int(j[p[3]&7]), int(j[p[4]&7]), int(j[p[5]&7])
+	return true
 }
 
-// sum describes Σ_t (-1)^t C(t+1, s(abc)+1) C(a+b-c, t-s(dec)) C(b+c-a, t-s(aef)) C(c+a-b, t-s(dbf)).
-//
-// The tops of the last three binomials add up to s(abc), so that the sum of their products is at
-// most C(s(abc), floor(s(abc)/2)), by Vandermonde's identity; the first binomial is largest at the
-// last t.
-func (k *tetrad) sum() binsum.Sum {
-	abc, aef, dbf, dec := (k.a+k.b+k.c)/2, (k.a+k.e+k.f)/2, (k.d+k.b+k.f)/2, (k.d+k.e+k.c)/2
-	ab, bc, ca := (k.a+k.b-k.c)/2, (k.b+k.c-k.a)/2, (k.c+k.a-k.b)/2
-	first, last := max(abc, aef, dbf, dec), min(ab+dec, bc+aef, ca+dbf)
-	return binsum.Sum{
-		Terms: last - first + 1,
-		Count: 4,
-		Factors: [4]binsum.Binomial{
-			{Top: first + 1, Low: abc + 1, Move: binsum.TopUp},
-			{Top: ab, Low: first - dec, Move: binsum.LowUp},
-			{Top: bc, Low: first - aef, Move: binsum.LowUp},
-			{Top: ca, Low: first - dbf, Move: binsum.LowUp},
-		},
-		Negative: first&1 != 0,
-		Bits:     binsum.BinomialBits(last+1, abc+1) + binsum.BinomialBits(abc, abc/2),
-	}
+// sixJOrders are the places of the arguments when each of the four triads stands in front.
+var sixJOrders = [4][6]uint8{
+	{0, 1, 2, 3, 4, 5},
+	{0, 4, 5, 3, 1, 2},
+	{3, 1, 5, 0, 4, 2},
+	{3, 4, 2, 0, 1, 5},
+}
+
+// exact returns the value.
+func (k *tetrad) exact() rational.Surd {
+	var front rational.Factored // squared
+	mulTriangle(&front, k.a, k.b, k.c, -1)
+	mulTriangle(&front, k.a, k.e, k.f, 1)
+	mulTriangle(&front, k.d, k.b, k.f, 1)
+	mulTriangle(&front, k.d, k.e, k.c, 1)
+	var sum binsum.Quadruple
+	k.sum(&sum)
+	return sum.Sqrt(&front)
+}
+
+// sum sets s to Racah's sum as in the doc of SixJ.
+func (k *tetrad) sum(s *binsum.Quadruple) {
+	s.T = (k.a + k.b + k.c) >> 1
+	s.N1, s.S1 = (k.a+k.b-k.c)>>1, (k.d+k.e+k.c)>>1
+	s.N2, s.S2 = (k.b+k.c-k.a)>>1, (k.a+k.e+k.f)>>1
+	s.N3, s.S3 = (k.c+k.a-k.b)>>1, (k.d+k.b+k.f)>>1
 }

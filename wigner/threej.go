@@ -22,14 +22,12 @@ import (
 // panics with *rational.ArgumentError for a negative j and for a j-m that is not an integer. Any j
 // is allowed; time grows like J times the number of terms, memory like J.
 func ThreeJ(j1, j2, j3, m1, m2, m3 rational.Half) rational.Surd {
-	q := symbol{fn: "wigner.ThreeJ", names: &threeJNames, j: [3]rational.Half{j1, j2, j3}, m: [3]rational.Half{m1, m2, m3}}
-	if err := q.check(); err != nil {
-		panic(err)
-	}
-	if q.rule().Zero() {
+	var r regge
+	if !r.set(j1, j2, j3, m1, m2, m3) {
+		forbidden("wigner.ThreeJ", &threeJNames, j1, j2, j3, m1, m2, m3)
 		return rational.Surd{}
 	}
-	return q.exact(false)
+	return r.exact(false)
 }
 
 // ClebschGordan returns the exact Clebsch-Gordan coefficient (j1 m1 j2 m2 | j m) in the
@@ -40,14 +38,12 @@ func ThreeJ(j1, j2, j3, m1, m2, m3 rational.Half) rational.Surd {
 //
 // Zeros, panics and cost are those of [ThreeJ]; [CheckClebschGordan] names the rule.
 func ClebschGordan(j1, m1, j2, m2, j, m rational.Half) rational.Surd {
-	q := clebschGordan("wigner.ClebschGordan", j1, m1, j2, m2, j, m)
-	if err := q.check(); err != nil {
-		panic(err)
-	}
-	if q.rule().Zero() {
+	var r regge
+	if !r.set(j1, j2, j, m1, m2, m.Neg()) {
+		forbidden("wigner.ClebschGordan", &cgNames, j1, j2, j, m1, m2, m.Neg())
 		return rational.Surd{}
 	}
-	return q.exact(true)
+	return r.exact(true)
 }
 
 // CheckThreeJ tells why the 3j symbol of [ThreeJ] vanishes, or that it does not: the first broken
@@ -55,17 +51,17 @@ func ClebschGordan(j1, m1, j2, m2, j, m rational.Half) rational.Surd {
 // accidental zero it computes the symbol. The error, a *rational.ArgumentError, names a malformed
 // argument; CheckThreeJ does not panic.
 func CheckThreeJ(j1, j2, j3, m1, m2, m3 rational.Half) (Verdict, error) {
-	q := symbol{fn: "wigner.CheckThreeJ", names: &threeJNames, j: [3]rational.Half{j1, j2, j3}, m: [3]rational.Half{m1, m2, m3}}
+	q := symbol{"wigner.CheckThreeJ", &threeJNames, [3]rational.Half{j1, j2, j3}, [3]rational.Half{m1, m2, m3}}
 	return q.verdict()
 }
 
 // CheckClebschGordan is [CheckThreeJ] for the coefficient of [ClebschGordan].
 func CheckClebschGordan(j1, m1, j2, m2, j, m rational.Half) (Verdict, error) {
-	q := clebschGordan("wigner.CheckClebschGordan", j1, m1, j2, m2, j, m)
+	q := symbol{"wigner.CheckClebschGordan", &cgNames, [3]rational.Half{j1, j2, j}, [3]rational.Half{m1, m2, m.Neg()}}
 	return q.verdict()
 }
 
-// symbol is a 3j symbol on its way from arguments to value.
+// symbol is a 3j symbol by its arguments, for whoever must tell what is wrong with them.
 type symbol struct {
 	fn    string
 	names *symbolNames
@@ -80,8 +76,12 @@ var (
 	cgNames     = symbolNames{[3]string{"j1", "j2", "j"}, [3]string{"m1", "m2", "m"}}
 )
 
-func clebschGordan(fn string, j1, m1, j2, m2, j, m rational.Half) symbol {
-	return symbol{fn, &cgNames, [3]rational.Half{j1, j2, j}, [3]rational.Half{m1, m2, m.Neg()}}
+// forbidden panics for a malformed argument.
+func forbidden(fn string, names *symbolNames, j1, j2, j3, m1, m2, m3 rational.Half) {
+	q := symbol{fn, names, [3]rational.Half{j1, j2, j3}, [3]rational.Half{m1, m2, m3}}
+	if err := q.check(); err != nil {
+		panic(err)
+	}
 }
 
 // check returns an error for a malformed argument.
@@ -125,11 +125,12 @@ func (q *symbol) verdict() (Verdict, error) {
 	if v := q.rule(); v.Zero() {
 		return v, nil
 	}
-	r := q.square()
-	if r.total()&1 == 1 && r.OddSymmetry() {
+	var r regge
+	r.set(q.j[0], q.j[1], q.j[2], q.m[0], q.m[1], q.m[2])
+	if r.total()&1 == 1 && square.Array(r).OddSymmetry() {
 		return Verdict{Rule: Symmetry}, nil
 	}
-	if q.exact(false).IsZero() {
+	if r.exact(false).IsZero() {
 		return Verdict{Rule: Accidental}, nil
 	}
 	return Verdict{}, nil
@@ -140,68 +141,58 @@ func (q *symbol) verdict() (Verdict, error) {
 //	-j1+j2+j3  j1-j2+j3  j1+j2-j3
 //	  j1-m1      j2-m2     j3-m3
 //	  j1+m1      j2+m2     j3+m3
-type regge struct{ square.Array }
+type regge square.Array
 
-func (r *regge) total() int { return r.Array[0] + r.Array[1] + r.Array[2] }
-
-// square returns the square of an allowed symbol.
-func (q *symbol) square() (r regge) {
-	a, b, c := q.j[0].Twice(), q.j[1].Twice(), q.j[2].Twice()
-	r.Array[0], r.Array[1], r.Array[2] = (b-a+c)/2, (a-b+c)/2, (a-c+b)/2
-	for i := range 3 {
-		r.Array[3+i] = (q.j[i].Twice() - q.m[i].Twice()) / 2
-		r.Array[6+i] = (q.j[i].Twice() + q.m[i].Twice()) / 2
+// set takes a symbol that no selection rule forbids; it returns false for any other and for malformed
+// arguments.
+func (r *regge) set(j1, j2, j3, m1, m2, m3 rational.Half) bool {
+	// 64 bits hold the sums of Halves on every platform. A negative j makes j-m or j+m negative.
+	a, b, c := int64(j1.Twice()), int64(j2.Twice()), int64(j3.Twice())
+	x, y, z := int64(m1.Twice()), int64(m2.Twice()), int64(m3.Twice())
+	n3, n2, n1 := b-a+c, a-b+c, a+b-c
+	if n1|n2|n3|(a-x)|(a+x)|(b-y)|(b+y)|(c-z)|(c+z) < 0 || (n1|(a-x)|(b-y)|(c-z))&1 != 0 || x+y+z != 0 {
+		return false
 	}
-	return r
+	r[0], r[1], r[2] = int(n3>>1), int(n2>>1), int(n1>>1)
+	r[3], r[4], r[5] = int((a-x)>>1), int((b-y)>>1), int((c-z)>>1)
+	r[6], r[7], r[8] = int((a+x)>>1), int((b+y)>>1), int((c+z)>>1)
+	return true
 }
 
-// exact returns the value of an allowed symbol, as a 3j symbol or as a Clebsch-Gordan coefficient.
-func (q *symbol) exact(coefficient bool) rational.Surd {
-	r := q.square()
+// total returns J.
+func (r *regge) total() int { return r[0] + r[1] + r[2] }
+
+// sum returns the sum of DLMF (34.2.4). It has as many terms as the smallest entry of the square has
+// units, and one.
+func (r *regge) sum() binsum.Triple {
+	return binsum.Triple{N1: r[2], N2: r[1], N3: r[0], A: r[3], B: r[7]}
+}
+
+// negative reports whether there is a sign - before the sum: (-1)^(j1-j2-m3) of the 3j symbol, where
+// j1-j2-m3 = (j1+m1) - (j2-m2). The coefficient has none, since the phases of DLMF (34.1.1) and (34.2.4)
+// cancel.
+func (r *regge) negative(coefficient bool) bool { return !coefficient && (r[6]-r[4])&1 != 0 }
+
+// exact returns the value as a 3j symbol or as a Clebsch-Gordan coefficient.
+func (r *regge) exact(coefficient bool) rational.Surd {
 	sum := r.sum()
 	var front rational.Factored // squared
-	r.prefactor(&front)
-	if coefficient {
-		front.MulInt(q.j[2].Twice()+1, 1) // the two phases of DLMF (34.1.1) and (34.2.4) cancel
-	} else if r.phase() {
-		sum.Negative = !sum.Negative
-	}
-	return sum.Sqrt(&front)
-}
-
-// phase reports whether (-1)^(j1-j2-m3) = -1; j1-j2-m3 = (j1+m1) - (j2-m2).
-func (r *regge) phase() bool { return (r.Array[6]-r.Array[4])&1 != 0 }
-
-// sum describes Σ_k (-1)^k C(n1,k) C(n2,j1-m1-k) C(n3,j2+m2-k). It has as many terms as the
-// smallest entry of the square has units, and one.
-//
-// The absolute values of its terms add up to at most C(n1+n2, j1-m1) max_i C(n3, i), by
-// Vandermonde's identity, and that is at most C(J, floor(J/2)), by the same.
-func (r *regge) sum() binsum.Sum {
-	n3, n2, n1 := r.Array[0], r.Array[1], r.Array[2]
-	a, b := r.Array[3], r.Array[7]
-	first, last := max(0, a-n2, b-n3), min(n1, a, b)
-	return binsum.Sum{
-		Terms: last - first + 1,
-		Count: 3,
-		Factors: [4]binsum.Binomial{
-			{Top: n1, Low: first, Move: binsum.LowUp},
-			{Top: n2, Low: a - first, Move: binsum.LowDown},
-			{Top: n3, Low: b - first, Move: binsum.LowDown},
-		},
-		Negative: first&1 != 0,
-		Bits:     binsum.BinomialBits(n1+n2+n3, (n1+n2+n3)/2),
-	}
-}
-
-// prefactor multiplies f by the square of the factor in front of the sum.
-func (r *regge) prefactor(f *rational.Factored) {
-	for i, n := range r.Array {
+	for i, n := range r {
 		if i < 3 {
-			f.MulFactorial(n, -1)
+			front.MulFactorial(n, -1)
 		} else {
-			f.MulFactorial(n, 1)
+			front.MulFactorial(n, 1)
 		}
 	}
-	f.MulFactorial(r.total()+1, -1)
+	front.MulFactorial(r.total()+1, -1)
+	if coefficient {
+		front.MulInt(r.twiceJ3()+1, 1)
+	}
+	v := sum.Sqrt(&front)
+	if r.negative(coefficient) {
+		return v.Neg()
+	}
+	return v
 }
+
+func (r *regge) twiceJ3() int { return r[0] + r[1] }

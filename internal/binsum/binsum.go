@@ -6,7 +6,6 @@ package binsum
 import (
 	"math/big"
 	"math/bits"
-	"sync"
 
 	"example.org/couplet/rational"
 )
@@ -40,81 +39,81 @@ type Sum struct {
 	Bits     int         // the sum of the |t(k)| is less than 2^Bits
 }
 
-// tableTops bounds Top in the table of binomials.
-const tableTops = 96
-
-// pascal returns C(top, low) modulo 2^64 at index top*tableTops + low.
-var pascal = sync.OnceValue(func() *[tableTops * tableTops]uint64 {
-	var t [tableTops * tableTops]uint64
-	for top := range tableTops {
-		t[top*tableTops] = 1
-		for low := 1; low <= top; low++ {
-			t[top*tableTops+low] = t[(top-1)*tableTops+low-1] + t[(top-1)*tableTops+low]
-		}
-	}
-	return &t
-})
-
-// tableStep is the change of index in the table that a move makes.
-var tableStep = [...]int{LowUp: 1, LowDown: -1, TopUp: tableTops}
-
-// Word returns S where one signed word is sure to hold it; ok is false elsewhere.
-//
-// Everything is computed modulo 2^64, so that only S itself must fit, not its terms nor the
-// binomials.
-func (s *Sum) Word() (value int64, ok bool) {
-	if s.Bits > 63 {
-		return 0, false
-	}
-	var index, step [4]int
-	for i, f := range s.Factors[:s.Count] {
-		last := f.Top
-		if f.Move == TopUp {
-			last += s.Terms - 1
-		}
-		if last >= tableTops {
-			return 0, false
-		}
-		index[i], step[i] = f.Top*tableTops+f.Low, tableStep[f.Move]
-	}
-	table := pascal()
-	var total uint64
-	for range s.Terms {
-		t := uint64(1)
-		for i := range s.Count {
-			t *= table[index[i]]
-			index[i] += step[i]
-		}
-		total = t - total // the last term ends with sign +
-	}
-	if s.Negative == (s.Terms&1 == 1) {
-		total = -total
-	}
-	return int64(total), true
-}
-
 // Int sets z to S and returns it.
+//
+// Every term but the first follows from the one before by a multiplication and an exact division by a
+// word or two, so that the cost is proportional to Terms times the length of S.
 func (s *Sum) Int(z *big.Int) *big.Int {
-	if v, ok := s.Word(); ok {
-		return z.SetInt64(v)
+	var stack buffer
+	total, negative := s.words(&stack)
+	z.SetBits(append(z.Bits()[:0], total...))
+	if negative {
+		z.Neg(z)
 	}
-	return s.long(z)
+	return z
 }
 
-// long is Int by as many words as it takes.
+// Leading returns the 128 leading bits of |S| and what they must be multiplied by,
 //
-// The first term is multiplied together from its primes. Every further one follows from the one
-// before by a multiplication and an exact division by a word or two, so that the cost is
-// proportional to Terms times the length of S.
-func (s *Sum) long(z *big.Int) *big.Int {
+//	(high*2^64 + low) * 2^exp <= |S|,
+//
+// with the top bit of high set and what follows low left out, and whether S is negative. All are zero
+// for S = 0. Up to 1400 bits it allocates nothing.
+func (s *Sum) Leading() (high, low uint64, exp int, negative bool) {
+	var stack buffer
+	total, negative := s.words(&stack)
+	if len(total) == 0 {
+		return 0, 0, 0, false
+	}
+	// The next 64 bits below position p of the words, zeros below the end.
+	shift := bits.LeadingZeros(uint(total[len(total)-1]))
+	position := len(total)*bits.UintSize - shift
+	take := func() (v uint64) {
+		for range 64 / bits.UintSize {
+			position -= bits.UintSize
+			v = v<<(bits.UintSize-1)<<1 | uint64(window(total, position))
+		}
+		return v
+	}
+	high = take()
+	low = take()
+	return high, low, position, negative
+}
+
+// window returns the word of bits from position up, zeros below position 0.
+func window(x []big.Word, position int) big.Word {
+	if position <= -bits.UintSize {
+		return 0
+	}
+	index, offset := position>>wordLog, uint(position)&(bits.UintSize-1)
+	var w big.Word
+	if index >= 0 {
+		w = x[index] >> offset
+	}
+	if index+1 < len(x) {
+		w |= x[index+1] << 1 << (bits.UintSize - 1 - offset)
+	}
+	return w
+}
+
+// wordLog is the logarithm of the size of a word, 5 or 6.
+const wordLog = 5 + bits.UintSize>>6
+
+// stackWidth is the widest sum, in words, that is computed without allocation.
+const stackWidth = 24
+
+type buffer [2 * stackWidth]big.Word
+
+// words returns |S|, without leading zeros, and whether S is negative. It computes in the buffer where
+// that is wide enough.
+func (s *Sum) words(stack *buffer) (total []big.Word, negative bool) {
 	width := s.Bits/bits.UintSize + 2 // room for the sign, and for a word before it is divided out
-	var stack [2 * stackWidth]big.Word
 	words := stack[:]
 	if width > stackWidth {
 		words = make([]big.Word, 2*width)
 	}
 	total, term := words[:width], words[width:width]
-	term = append(term, s.first(z).Bits()...)
+	term = s.first(term)
 	add(total, term)
 	factors := s.Factors
 	for k := 1; k < s.Terms; k++ {
@@ -125,14 +124,32 @@ func (s *Sum) long(z *big.Int) *big.Int {
 			subtract(total, term)
 		}
 	}
-	return setSigned(z, total, s.Negative)
+	return magnitude(total, s.Negative)
 }
 
-// stackWidth is the widest sum, in words, that is computed without allocation.
-const stackWidth = 24
+// first appends t(0) to an empty slice.
+func (s *Sum) first(term []big.Word) []big.Word {
+	term = append(term, 1)
+	if s.Bits/bits.UintSize+2 > stackWidth {
+		return append(term[:0], s.firstFactored().Bits()...)
+	}
+	table := binomials()
+	for _, b := range s.Factors[:s.Count] {
+		if b.Top < tableTops && table.high[place(b.Top, b.Low)] == 0 && bits.UintSize == 64 {
+			term = mulWord(term, uint(table.low[place(b.Top, b.Low)]))
+			continue
+		}
+		// One factor after the other: C(n, k) = n/k C(n-1, k-1).
+		k := min(b.Low, b.Top-b.Low)
+		for i := 1; i <= k; i++ {
+			term = divExact(mulWord(term, uint(b.Top-k+i)), uint(i))
+		}
+	}
+	return term
+}
 
-// first sets z to t(0) and returns it.
-func (s *Sum) first(z *big.Int) *big.Int {
+// firstFactored returns t(0), multiplied together from its primes: the way for long numbers.
+func (s *Sum) firstFactored() *big.Int {
 	var f rational.Factored
 	for _, b := range s.Factors[:s.Count] {
 		if b.Low != 0 && b.Low != b.Top {
@@ -141,7 +158,7 @@ func (s *Sum) first(z *big.Int) *big.Int {
 			f.MulFactorial(b.Top-b.Low, -1)
 		}
 	}
-	return f.Int(z)
+	return f.Int(new(big.Int))
 }
 
 // next changes term from t(k) to t(k+1), and the factors with it.
@@ -191,7 +208,7 @@ func (b *Binomial) advance() (num, den uint) {
 // BinomialBits returns a b with C(top, low) < 2^b.
 func BinomialBits(top, low int) int {
 	if top < 67 { // the last row that a word holds
-		return bits.Len64(pascal()[top*tableTops+low])
+		return bits.Len64(binomials().low[place(top, low)])
 	}
 	low = min(low, top-low)
 	// C(n, k) <= n^k/k! and k! >= (k/3)^k, so C <= (3n/k)^k; and C < 2^n.
@@ -199,13 +216,4 @@ func BinomialBits(top, low int) int {
 		return 1
 	}
 	return min(top, low*bits.Len(uint(3*top/low)))
-}
-
-// Sqrt returns S*sqrt(f).
-func (s *Sum) Sqrt(f *rational.Factored) rational.Surd {
-	if v, ok := s.Word(); ok {
-		return f.SqrtTimes(v)
-	}
-	var z big.Int
-	return f.SqrtTimesBig(s.Int(&z))
 }

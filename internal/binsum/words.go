@@ -88,8 +88,9 @@ func subtract(total, x []big.Word) {
 	}
 }
 
-// setSigned sets z to total, negated where negative is true. It uses up total.
-func setSigned(z *big.Int, total []big.Word, negative bool) *big.Int {
+// magnitude returns |total| in place, without leading zeros, and whether the number, negated where
+// negative is true, is negative.
+func magnitude(total []big.Word, negative bool) ([]big.Word, bool) {
 	if total[len(total)-1]>>(bits.UintSize-1) != 0 {
 		negative = !negative
 		carry := big.Word(1)
@@ -100,9 +101,8 @@ func setSigned(z *big.Int, total []big.Word, negative bool) *big.Int {
 			}
 		}
 	}
-	z.SetBits(append(z.Bits()[:0], total...))
-	if negative {
-		z.Neg(z)
+	for len(total) > 0 && total[len(total)-1] == 0 {
+		total = total[:len(total)-1]
 	}
-	return z
+	return total, negative && len(total) > 0
 }

@@ -152,3 +152,20 @@ func (c Counter) Log(t testing.TB) {
 	}
 	t.Logf("%5d  rows in all", total)
 }
+
+// Effort scales the number of draws of a random test by the environment variable COUPLET_EFFORT, 1
+// where it is not set, and to a tenth in a short run.
+func Effort(t testing.TB, n int) int {
+	t.Helper()
+	if text := os.Getenv("COUPLET_EFFORT"); text != "" {
+		effort, err := strconv.ParseFloat(text, 64)
+		if err != nil || effort <= 0 {
+			t.Fatalf("COUPLET_EFFORT = %q; allowed: a positive number", text)
+		}
+		return int(effort * float64(n))
+	}
+	if testing.Short() {
+		return n / 10
+	}
+	return n
+}

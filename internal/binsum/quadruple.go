@@ -1,0 +1,106 @@
+package binsum
+
+import (
+	"math/big"
+
+	"example.org/couplet/rational"
+)
+
+// Quadruple is the sum in a 6j symbol,
+//
+//	S = Σ_t (-1)^t C(t+1, T+1) C(N1, t-S1) C(N2, t-S2) C(N3, t-S3)
+//
+// over all t for which no binomial is zero; there is at least one. T = N1+N2+N3.
+type Quadruple struct{ T, N1, N2, N3, S1, S2, S3 int }
+
+func (s *Quadruple) limits() (first, last int) {
+	return max(s.T, s.S1, s.S2, s.S3), min(s.N1+s.S1, s.N2+s.S2, s.N3+s.S3)
+}
+
+// Fits reports whether the table of binomials reaches as far as the modular evaluations need.
+func (s *Quadruple) Fits() bool {
+	return min(s.N1+s.S1, s.N2+s.S2, s.N3+s.S3)+1 < tableTops
+}
+
+// Mod64 returns S modulo 2^64, where Fits.
+func (s *Quadruple) Mod64() uint64 {
+	first, last := s.limits()
+	t := &binomials().low
+	h, i, j, k := place(first+1, s.T+1), place(s.N1, first-s.S1), place(s.N2, first-s.S2), place(s.N3, first-s.S3)
+	var total uint64
+	for range last - first + 1 {
+		total = t[h]*t[i]*(t[j]*t[k]) - total
+		h += tableTops
+		i++
+		j++
+		k++
+	}
+	if last&1 != 0 {
+		total = -total
+	}
+	return total
+}
+
+// Mod128 returns S modulo 2^128, in two words, where Fits.
+func (s *Quadruple) Mod128() (high, low uint64) {
+	first, last := s.limits()
+	t := binomials()
+	h, i, j, k := place(first+1, s.T+1), place(s.N1, first-s.S1), place(s.N2, first-s.S2), place(s.N3, first-s.S3)
+	for range last - first + 1 {
+		a, b := mul128(t.high[h], t.low[h], t.high[i], t.low[i])
+		a, b = mul128(a, b, t.high[j], t.low[j])
+		a, b = mul128(a, b, t.high[k], t.low[k])
+		high, low = sub128(a, b, high, low)
+		h += tableTops
+		i++
+		j++
+		k++
+	}
+	if last&1 != 0 {
+		high, low = sub128(0, 0, high, low)
+	}
+	return high, low
+}
+
+// Int sets z to S and returns it.
+func (s *Quadruple) Int(z *big.Int) *big.Int {
+	if s.inWord() {
+		return z.SetInt64(int64(s.Mod64()))
+	}
+	sum := s.Sum()
+	return sum.Int(z)
+}
+
+// Sqrt returns S*sqrt(f), exactly.
+func (s *Quadruple) Sqrt(f *rational.Factored) rational.Surd {
+	if s.inWord() {
+		return f.SqrtTimes(int64(s.Mod64()))
+	}
+	return f.SqrtTimesBig(s.Int(new(big.Int)))
+}
+
+// Sum describes S for the evaluation in as many words as it takes.
+//
+// The tops of the last three binomials add up to T, so that the sum of their products is at most
+// C(T, floor(T/2)), by Vandermonde's identity; the first binomial is largest at the last t.
+func (s *Quadruple) Sum() Sum {
+	first, last := s.limits()
+	return Sum{
+		Terms: last - first + 1,
+		Count: 4,
+		Factors: [4]Binomial{
+			{Top: first + 1, Low: s.T + 1, Move: TopUp},
+			{Top: s.N1, Low: first - s.S1, Move: LowUp},
+			{Top: s.N2, Low: first - s.S2, Move: LowUp},
+			{Top: s.N3, Low: first - s.S3, Move: LowUp},
+		},
+		Negative: first&1 != 0,
+		Bits:     BinomialBits(last+1, s.T+1) + BinomialBits(s.T, s.T/2),
+	}
+}
+
+// inWord reports whether a signed word is sure to hold S.
+func (s *Quadruple) inWord() bool {
+	_, last := s.limits()
+	return s.Fits() && BinomialBits(last+1, s.T+1)+BinomialBits(s.T, s.T/2) <= 63
+}

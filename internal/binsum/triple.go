@@ -1,0 +1,95 @@
+package binsum
+
+import (
+	"math/big"
+
+	"example.org/couplet/rational"
+)
+
+// Triple is the sum in a 3j symbol,
+//
+//	S = Σ_k (-1)^k C(N1, k) C(N2, A-k) C(N3, B-k)
+//
+// over all k for which no binomial is zero; there is at least one.
+type Triple struct{ N1, N2, N3, A, B int }
+
+func (s *Triple) limits() (first, last int) {
+	return max(0, s.A-s.N2, s.B-s.N3), min(s.N1, s.A, s.B)
+}
+
+// Mod64 returns S modulo 2^64. The N must be below 132.
+func (s *Triple) Mod64() uint64 {
+	first, last := s.limits()
+	t := &binomials().low
+	i, j, k := place(s.N1, first), place(s.N2, s.A-first), place(s.N3, s.B-first)
+	var total uint64
+	for range last - first + 1 {
+		total = t[i]*t[j]*t[k] - total
+		i++
+		j--
+		k--
+	}
+	if last&1 != 0 { // total has the last term with sign +
+		total = -total
+	}
+	return total
+}
+
+// Mod128 returns S modulo 2^128, in two words. The N must be below 132.
+func (s *Triple) Mod128() (high, low uint64) {
+	first, last := s.limits()
+	t := binomials()
+	i, j, k := place(s.N1, first), place(s.N2, s.A-first), place(s.N3, s.B-first)
+	for range last - first + 1 {
+		h, l := mul128(t.high[i], t.low[i], t.high[j], t.low[j])
+		h, l = mul128(h, l, t.high[k], t.low[k])
+		high, low = sub128(h, l, high, low)
+		i++
+		j--
+		k--
+	}
+	if last&1 != 0 {
+		high, low = sub128(0, 0, high, low)
+	}
+	return high, low
+}
+
+// Int sets z to S and returns it.
+func (s *Triple) Int(z *big.Int) *big.Int {
+	if s.inWord() {
+		return z.SetInt64(int64(s.Mod64()))
+	}
+	sum := s.Sum()
+	return sum.Int(z)
+}
+
+// Sqrt returns S*sqrt(f), exactly.
+func (s *Triple) Sqrt(f *rational.Factored) rational.Surd {
+	if s.inWord() {
+		return f.SqrtTimes(int64(s.Mod64()))
+	}
+	return f.SqrtTimesBig(s.Int(new(big.Int)))
+}
+
+// Sum describes S for the evaluation in as many words as it takes.
+//
+// The absolute values of the terms add up to at most C(N1+N2, A) max_i C(N3, i), by Vandermonde's
+// identity, and that is at most C(N, floor(N/2)) with N = N1+N2+N3, by the same.
+func (s *Triple) Sum() Sum {
+	first, last := s.limits()
+	n := s.N1 + s.N2 + s.N3
+	return Sum{
+		Terms: last - first + 1,
+		Count: 3,
+		Factors: [4]Binomial{
+			{Top: s.N1, Low: first, Move: LowUp},
+			{Top: s.N2, Low: s.A - first, Move: LowDown},
+			{Top: s.N3, Low: s.B - first, Move: LowDown},
+		},
+		Negative: first&1 != 0,
+		Bits:     BinomialBits(n, n/2),
+	}
+}
+
+// inWord reports whether a signed word is sure to hold S: |S| <= C(66, 33) < 2^63.
+func (s *Triple) inWord() bool { return s.N1+s.N2+s.N3 <= 66 }

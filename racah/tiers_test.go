@@ -1,0 +1,91 @@
+package racah
+
+import (
+	"math"
+	"math/big"
+	"math/rand/v2"
+	"testing"
+
+	"example.org/couplet/internal/binsum"
+	"example.org/couplet/internal/dd"
+	"example.org/couplet/rational"
+)
+
+// drawTetrad returns a random allowed symbol with 2j to size.
+func drawTetrad(r *rand.Rand, size int) (k tetrad) {
+	for {
+		var j [6]rational.Half
+		for i := range j {
+			j[i] = rational.Halves(r.IntN(size + 1))
+		}
+		if k.set(j[0], j[1], j[2], j[3], j[4], j[5]) {
+			return k
+		}
+	}
+}
+
+// Every tier, on the same small symbols, gives the bits of the exact route.
+func TestForcedTiers(t *testing.T) {
+	r := rand.New(rand.NewPCG(14, 14))
+	for range 4000 {
+		k := drawTetrad(r, 12)
+		var sum binsum.Quadruple
+		k.sum(&sum)
+		want := k.exact().Float64()
+		front := k.smallFront(&sum)
+		words := sum.Sum()
+		high, low, exp, negative := words.Leading()
+		for i, s := range []dd.Pair{dd.FromInt64(int64(sum.Mod64())), dd.FromMod128(sum.Mod128()), dd.FromWords(high, low).Scale(exp, negative)} {
+			if want == 0 && s.Hi == 0 {
+				continue
+			}
+			if got, ok := front.Mul(s).Round(smallError); !ok || got != want {
+				t.Fatalf("%+v, tier %d: %g, %v, exact %g", k, i, got, ok, want)
+			}
+		}
+		for i, tier := range []func(*binsum.Quadruple) (float64, bool){k.fewWords, k.manyWords} {
+			if got, ok := tier(&sum); !ok || math.Float64bits(got) != math.Float64bits(want) {
+				t.Fatalf("%+v, route %d: %g, %v, exact %g", k, i, got, ok, want)
+			}
+		}
+	}
+}
+
+// The fronts are as accurate as they claim before they are rounded, and not much more: a smaller bound
+// makes this test fail.
+func TestFrontErrors(t *testing.T) {
+	r := rand.New(rand.NewPCG(15, 15))
+	worstSmall, worstLarge := 0.0, 0.0
+	for range 6000 {
+		k := drawTetrad(r, []int{6, 20, 60, 80}[r.IntN(4)])
+		var sum binsum.Quadruple
+		k.sum(&sum)
+		if !sum.Fits() {
+			continue
+		}
+		var f rational.Factored
+		mulTriangle(&f, k.a, k.b, k.c, -1)
+		mulTriangle(&f, k.a, k.e, k.f, 1)
+		mulTriangle(&f, k.d, k.b, k.f, 1)
+		mulTriangle(&f, k.d, k.e, k.c, 1)
+		want := f.SqrtTimes(1).Float(300)
+		worstSmall = max(worstSmall, relative(k.smallFront(&sum), 0, want))
+		large := k.largeFront()
+		worstLarge = max(worstLarge, relative(large.Pair, large.Exp, want))
+	}
+	t.Logf("largest errors: %.1f of %.0f u^2 and %.1f of %.0f u^2", worstSmall*0x1p106, smallError*0x1p106, worstLarge*0x1p106, largeError*0x1p106)
+	if worstSmall > smallError || worstLarge > largeError {
+		t.Error("the error exceeds the bound")
+	}
+	if worstSmall < smallError/64 || worstLarge < largeError/64 {
+		t.Error("the bound is far too wide")
+	}
+}
+
+func relative(p dd.Pair, exp int, want *big.Float) float64 {
+	got := new(big.Float).SetPrec(300).SetFloat64(p.Hi)
+	got.Add(got, new(big.Float).SetPrec(300).SetFloat64(p.Lo))
+	got.SetMantExp(got, exp)
+	f, _ := got.Sub(got, want).Quo(got, want).Float64()
+	return math.Abs(f)
+}
