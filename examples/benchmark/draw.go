@@ -8,40 +8,50 @@ import (
 	"example.org/couplet/wigner"
 )
 
-// cell is a line of the table.
+// cell is a line of a table.
 type cell struct {
+	symbol
+	size  int  // J: every j is between J/2 and J
+	most  int  // sets at the most
+	alone bool // the other side is not asked: it cannot do this size
+}
+
+// symbol is what the tables compare.
+type symbol struct {
 	name   string
-	size   int // J: every j is between J/2 and J
-	symbol func(q []rational.Half) rational.Surd
+	places int // momenta
 	triads [][3]int
-	places int
+	exact  func(q []rational.Half) rational.Surd
+	float  func(q []rational.Half) float64
 }
 
-// cells are the lines of the table, the fast ones first.
-var cells = func() (list []cell) {
-	for _, size := range []int{2, 8, 30, 100, 1000} {
-		list = append(list, cell{"3j", size, threeJ, [][3]int{{0, 1, 2}}, 3})
+var (
+	threeJ = symbol{"3j", 3, [][3]int{{0, 1, 2}},
+		func(q []rational.Half) rational.Surd { return wigner.ThreeJ(q[0], q[1], q[2], q[3], q[4], q[5]) },
+		func(q []rational.Half) float64 { return wigner.ThreeJFloat(q[0], q[1], q[2], q[3], q[4], q[5]) }}
+	sixJ = symbol{"6j", 6, [][3]int{{0, 1, 2}, {0, 4, 5}, {3, 1, 5}, {3, 4, 2}},
+		func(q []rational.Half) rational.Surd { return racah.SixJ(q[0], q[1], q[2], q[3], q[4], q[5]) },
+		func(q []rational.Half) float64 { return racah.SixJFloat(q[0], q[1], q[2], q[3], q[4], q[5]) }}
+	nineJ = symbol{"9j", 9, [][3]int{{0, 1, 2}, {3, 4, 5}, {6, 7, 8}, {0, 3, 6}, {1, 4, 7}, {2, 5, 8}},
+		func(q []rational.Half) rational.Surd {
+			return racah.NineJ(q[0], q[1], q[2], q[3], q[4], q[5], q[6], q[7], q[8])
+		}, nil}
+)
+
+// The lines of the tables.
+var (
+	exactCells = []cell{
+		{threeJ, 2, 4096, false}, {threeJ, 8, 4096, false}, {threeJ, 30, 4096, false}, {threeJ, 100, 4096, false}, {threeJ, 1000, 4096, false},
+		{sixJ, 2, 4096, false}, {sixJ, 8, 4096, false}, {sixJ, 30, 4096, false}, {sixJ, 100, 4096, false}, {sixJ, 1000, 4096, false},
+		{nineJ, 2, 4096, false}, {nineJ, 8, 4096, false}, {nineJ, 30, 4096, false},
 	}
-	for _, size := range []int{2, 8, 30, 100, 1000} {
-		list = append(list, cell{"6j", size, sixJ, [][3]int{{0, 1, 2}, {0, 4, 5}, {3, 1, 5}, {3, 4, 2}}, 6})
+	floatCells = []cell{
+		{threeJ, 1, 4096, false}, {threeJ, 8, 4096, false}, {threeJ, 16, 4096, false}, {threeJ, 30, 4096, false}, {threeJ, 50, 4096, false},
+		{threeJ, 100, 64, true}, {threeJ, 1000, 64, true}, {threeJ, 20000, 16, true},
+		{sixJ, 1, 4096, false}, {sixJ, 8, 4096, false}, {sixJ, 16, 4096, false}, {sixJ, 30, 4096, false}, {sixJ, 50, 4096, false},
+		{sixJ, 100, 64, true}, {sixJ, 1000, 64, true},
 	}
-	for _, size := range []int{2, 8, 30} {
-		list = append(list, cell{"9j", size, nineJ, [][3]int{{0, 1, 2}, {3, 4, 5}, {6, 7, 8}, {0, 3, 6}, {1, 4, 7}, {2, 5, 8}}, 9})
-	}
-	return list
-}()
-
-func threeJ(q []rational.Half) rational.Surd {
-	return wigner.ThreeJ(q[0], q[1], q[2], q[3], q[4], q[5])
-}
-
-func sixJ(q []rational.Half) rational.Surd {
-	return racah.SixJ(q[0], q[1], q[2], q[3], q[4], q[5])
-}
-
-func nineJ(q []rational.Half) rational.Surd {
-	return racah.NineJ(q[0], q[1], q[2], q[3], q[4], q[5], q[6], q[7], q[8])
-}
+)
 
 // draw returns n sets of allowed arguments, the same in every run.
 func (c cell) draw(n int) [][]rational.Half {

@@ -2,6 +2,7 @@ package main
 
 import (
 	"bytes"
+	"io"
 	"strings"
 	"testing"
 
@@ -9,26 +10,32 @@ import (
 	"example.org/couplet/wigner"
 )
 
-// Without SymPy the table has our times alone, a line for each symbol and size.
+// Without another side the tables have our times alone, a line for each symbol and size.
 func TestTableWithoutPeer(t *testing.T) {
 	var b bytes.Buffer
-	if err := run(&b, nil, 1); err != nil {
-		t.Fatal(err)
-	}
-	lines := strings.Split(strings.TrimSpace(b.String()), "\n")
-	if len(lines) != len(cells)+1 {
-		t.Errorf("%d lines for %d cells", len(lines), len(cells))
-	}
-	for _, line := range lines[1:] {
-		if !strings.HasSuffix(line, "s") { // ns, us, ms
-			t.Errorf("no time in %q", line)
+	for _, table := range []struct {
+		print func(w io.Writer, other *peer, sets int) error
+		cells []cell
+	}{{exactTable, exactCells}, {floatTable, floatCells}} {
+		b.Reset()
+		if err := table.print(&b, nil, 1); err != nil {
+			t.Fatal(err)
+		}
+		lines := strings.Split(strings.TrimSpace(b.String()), "\n")
+		if len(lines) != len(table.cells)+1 {
+			t.Errorf("%d lines for %d cells", len(lines), len(table.cells))
+		}
+		for _, line := range lines[1:] {
+			if !strings.HasSuffix(line, "s") { // ns, us, ms
+				t.Errorf("no time in %q", line)
+			}
 		}
 	}
 }
 
 // The draws keep to the sizes, fulfill the rules and, nearly all, give values that are not zero.
 func TestDraw(t *testing.T) {
-	for _, c := range cells {
+	for _, c := range append(exactCells, floatCells...) {
 		if c.size > 30 {
 			continue
 		}
@@ -44,7 +51,7 @@ func TestDraw(t *testing.T) {
 					t.Errorf("%s %v: %v", c.name, q, r)
 				}
 			}
-			if !c.symbol(q).IsZero() {
+			if !c.exact(q).IsZero() {
 				nonzero++
 			}
 		}
@@ -55,7 +62,7 @@ func TestDraw(t *testing.T) {
 }
 
 func TestUnitsOfTime(t *testing.T) {
-	for seconds, want := range map[float64]string{1.2e-8: "12 ns", 3.456e-6: "3.46 us", 0.25: "250 ms"} {
+	for seconds, want := range map[float64]string{1.2e-8: "12.0 ns", 2.5e-7: "250 ns", 3.456e-6: "3.46 us", 0.25: "250 ms"} {
 		if got := duration(seconds); got != want {
 			t.Errorf("%g s prints as %s, want %s", seconds, got, want)
 		}
@@ -68,7 +75,7 @@ func TestUnitsOfTime(t *testing.T) {
 // An interpreter that does not exist, and one that knows no SymPy, are errors.
 func TestNoPeer(t *testing.T) {
 	for _, name := range []string{"no-such-interpreter", "false"} {
-		if p, err := startPeer(name); err == nil {
+		if p, err := startSymPy(name); err == nil {
 			t.Errorf("%s gives %v", name, p)
 		}
 	}
