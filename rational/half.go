@@ -113,9 +113,6 @@ func ParseHalf(s string) (Half, error) {
 	} else if d, ok := strings.CutSuffix(s, ".0"); ok {
 		digits = d
 	}
-	if c := strings.TrimLeft(digits, "+-"); c == "" || strings.ContainsRune(c, '_') {
-		return Half{}, &ParseError{"rational.ParseHalf", s, 0, allowed}
-	}
 	n, err := strconv.ParseInt(digits, 10, 32)
 	if err != nil {
 		return Half{}, &ParseError{"rational.ParseHalf", s, 0, allowed}

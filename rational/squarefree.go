@@ -25,14 +25,8 @@ func splitSquare(n uint64) (outer, inner uint64) {
 		for ; start < len(primes); start++ {
 			p := uint64(primes[start])
 			if hi, cube := bits.Mul64(p*p, p); hi != 0 || cube > n {
-				root := uint64(math.Sqrt(float64(n)))
-				for root*root > n || root > math.MaxUint32 {
-					root--
-				}
-				for root < math.MaxUint32 && (root+1)*(root+1) <= n {
-					root++
-				}
-				if root*root == n {
+				// The root of a square of p < 2^32 is p up to 2^-20, and that rounds to p.
+				if root := uint64(math.Sqrt(float64(n))); root*root == n {
 					return outer * root, inner
 				}
 				return outer, inner * n

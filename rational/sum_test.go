@@ -148,6 +148,29 @@ func TestSumFloat64(t *testing.T) {
 	}
 }
 
+// A tie of 54 bits, and a sum beside it by p - q sqrt(2), which is as small as 1/(2p) for the solutions of
+// Pell's equation: the first intervals hold the tie.
+func TestSumFloat64NearTies(t *testing.T) {
+	p, q := big.NewInt(1), big.NewInt(1)
+	for n := range 200 {
+		if n > 2 {
+			beside := rational.FromRat(new(big.Rat).SetInt(p)).Sub(rational.FromRat(new(big.Rat).SetInt(q)).Mul(rational.Root(2, 1)))
+			s := rational.Ratio(1<<53+1, 1).Sum().Add(beside)
+			want := float64(1 << 53)
+			if n%2 == 1 { // p > q sqrt(2)
+				want += 2
+			}
+			if got := s.Float64(); got != want {
+				t.Errorf("p of %d bits: %.0f, want %.0f", p.BitLen(), got, want)
+			}
+			if got, _ := s.Float(53).Float64(); got != want {
+				t.Errorf("p of %d bits: Float(53) gives %.0f, want %.0f", p.BitLen(), got, want)
+			}
+		}
+		p, q = new(big.Int).Add(p, new(big.Int).Lsh(q, 1)), new(big.Int).Add(p, q)
+	}
+}
+
 func TestComplexArithmetic(t *testing.T) {
 	parts := sums(8)
 	var list []rational.Complex
@@ -225,6 +248,8 @@ func TestMatrix(t *testing.T) {
 	mustPanic(t, "rational.Matrix.Add: n = 3 x 4 matrix; allowed: a shape that fits a 2 x 3 matrix", func() { a.Add(c) })
 	mustPanic(t, "rational.Matrix.Sub: n = 3 x 4 matrix; allowed: a shape that fits a 2 x 3 matrix", func() { a.Sub(c) })
 	mustPanic(t, "rational.Matrix.At: i, j = 2, 0; allowed: i from 0 to 1, j from 0 to 2", func() { a.At(2, 0) })
+	mustPanic(t, "rational.Matrix.At: i, j = 0, 3; allowed: i from 0 to 1, j from 0 to 2", func() { a.At(0, 3) })
+	mustPanic(t, "rational.Matrix.At: i, j = 0, -1; allowed: i from 0 to 1, j from 0 to 2", func() { a.At(0, -1) })
 	mustPanic(t, "rational.NewMatrix: rows, cols = -1, 2; allowed: both >= 0", func() { rational.NewMatrix(-1, 2, nil) })
 	if rows, cols := (rational.Matrix{}).Dims(); rows != 0 || cols != 0 || (rational.Matrix{}).String() != "" {
 		t.Error("the zero value is not the empty matrix")

@@ -114,6 +114,24 @@ func TestSurdOneForm(t *testing.T) {
 	}
 }
 
+// The inverse of a denominator that is no signed word.
+func TestInvAtTheEdge(t *testing.T) {
+	parse := func(text string) rational.Surd {
+		s, err := rational.ParseSurd(text)
+		if err != nil {
+			t.Fatal(err)
+		}
+		return s
+	}
+	for _, c := range [][2]string{{"1/9223372036854775808", "9223372036854775808"}, {"-1/9223372036854775808", "-9223372036854775808"},
+		{"1/9223372036854775807", "9223372036854775807"}, {"1/18446744073709551615*sqrt(2)", "18446744073709551615/2*sqrt(2)"}} {
+		a, b := parse(c[0]), parse(c[1])
+		if !a.Inv().Equal(b) || !b.Inv().Equal(a) || a.Inv().Key() != c[1] {
+			t.Errorf("1/(%s) = %v, want %s", c[0], a.Inv(), c[1])
+		}
+	}
+}
+
 func TestNotComparable(t *testing.T) {
 	for _, v := range []any{rational.Surd{}, rational.Sum{}, rational.Complex{}, rational.Matrix{}} {
 		if reflect.TypeOf(v).Comparable() {
@@ -137,12 +155,28 @@ func TestSurdHandsOutCopies(t *testing.T) {
 			t.Errorf("%s became %v", before, s)
 		}
 	}
-	r := big.NewRat(22, 7)
-	s := rational.FromRat(r)
-	r.SetInt64(5)
-	r.Num().SetInt64(9)
-	if s.String() != "22/7" {
-		t.Errorf("FromRat shares memory with its argument: %v", s)
+	for _, text := range []string{"22/7", "123456789012345678901234567890/11111111111111111111111111111111111"} {
+		r, _ := new(big.Rat).SetString(text)
+		s := rational.FromRat(r)
+		r.Num().Add(r.Num(), big.NewInt(1))
+		r.Denom().SetInt64(5)
+		if s.String() != text {
+			t.Errorf("FromRat shares memory with its argument: %v", s)
+		}
+	}
+	n := new(big.Int).Lsh(big.NewInt(3), 100)
+	before := n.String()
+	var f rational.Factored
+	f.MulFactorial(20, -2)
+	f.MulFactorial(9, 3)
+	f.SqrtTimesBig(n)
+	if n.String() != before {
+		t.Errorf("SqrtTimesBig changes its argument to %v", n)
+	}
+	sum := rational.Root(2, 1).Add(rational.Root(3, 1))
+	sum.Terms()[0] = rational.Ratio(7, 1)
+	if sum.String() != "sqrt(2) + sqrt(3)" {
+		t.Errorf("Terms shares memory with the sum: %v", sum)
 	}
 }
 
@@ -230,6 +264,37 @@ func TestSurdFloat64Ties(t *testing.T) {
 		if want, _ := wantFloat(above).Float64(); above.Float64() != want {
 			t.Errorf("%s * 2^%d and a little rounds to %g, want %g", c.value[:min(20, len(c.value))], c.exponent, above.Float64(), want)
 		}
+	}
+}
+
+// k q sqrt(2) next to the tie k p of 54 bits, for the solutions p^2 - 2 q^2 = ±1 of Pell's equation: it is
+// off by less than 2^-20, to the side that the sign of p^2 - 2 q^2 tells.
+func TestSurdFloat64NearTies(t *testing.T) {
+	cases := 0
+	p, q, sign := int64(1), int64(1), -1
+	for ; p < 1<<53; p, q, sign = p+2*q, p+q, -sign {
+		if p < 1<<38 {
+			continue
+		}
+		k := (1<<54-1)/p | 1 // odd, so that k p is odd
+		if k*p >= 1<<54 {
+			k -= 2
+		}
+		if k < 1 || k*p < 1<<53 {
+			continue
+		}
+		cases++
+		s := rational.Ratio(k*q, 1).Mul(rational.Root(2, 1))
+		want := float64(k*p - int64(sign)) // even, 53 bits: below the tie where p^2 > 2 q^2
+		if got := s.Float64(); got != want {
+			t.Errorf("%v = %.0f, want %.0f", s, got, want)
+		}
+		if got := s.Neg().Float64(); got != -want {
+			t.Errorf("%v = %.0f, want %.0f", s.Neg(), got, -want)
+		}
+	}
+	if cases < 6 {
+		t.Errorf("only %d cases", cases)
 	}
 }
 

@@ -146,6 +146,26 @@ func TestQuadruple(t *testing.T) {
 	}
 }
 
+// Tops so large that the factors of a step do not fit into one word together.
+func TestLargeTops(t *testing.T) {
+	r := rand.New(rand.NewPCG(21, 21))
+	for range 300 {
+		s := Sum{Terms: 4, Count: 4, Negative: r.IntN(2) == 0}
+		for i := range s.Factors {
+			low := 4 + r.IntN(5)
+			s.Factors[i] = Binomial{Top: 1<<22 + r.IntN(1<<24), Low: low, Move: Move(r.IntN(3))}
+			if r.IntN(2) == 0 { // large bottoms, so that the denominators are large too
+				s.Factors[i].Low = s.Factors[i].Top - low
+			}
+		}
+		want, absolute := plain(&s)
+		s.Bits = absolute.BitLen()
+		if got := s.Int(new(big.Int)); got.Cmp(want) != 0 {
+			t.Fatalf("%+v: %v, want %v", s, got, want)
+		}
+	}
+}
+
 func TestAllocations(t *testing.T) {
 	triple, quadruple := Triple{30, 20, 10, 20, 15}, Quadruple{60, 20, 20, 20, 60, 60, 60}
 	long := Triple{120, 100, 80, 110, 90}
