@@ -1,5 +1,5 @@
-// Package racah computes the recoupling coefficients of three and four angular momenta, exactly:
-// Wigner's 6j and 9j symbols and Racah's W.
+// Package racah computes the recoupling coefficients of three and four angular momenta, exactly and as
+// float64: Wigner's 6j and 9j symbols and Racah's W.
 //
 // # Conventions
 //
@@ -15,5 +15,6 @@
 //
 // # Accuracy
 //
-// Everything is exact, for arguments of any size that memory allows.
+// The functions whose names end in Float return the nearest float64, to even on a tie; all others are
+// exact. Both hold for arguments of any size that memory allows.
 package racah

@@ -1,5 +1,5 @@
 // Package wigner computes what the coupling of two angular momenta needs: Wigner 3j symbols and
-// Clebsch-Gordan coefficients, exactly; the states that couple; and the operators of one angular
+// Clebsch-Gordan coefficients, exactly and as float64; the states that couple; and the operators of one angular
 // momentum with the states on which they act.
 //
 // # Conventions
@@ -21,5 +21,6 @@
 //
 // # Accuracy
 //
-// Everything is exact, for arguments of any size that memory allows.
+// The functions whose names end in Float return the nearest float64, to even on a tie; all others are
+// exact. Both hold for arguments of any size that memory allows.
 package wigner
