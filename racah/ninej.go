@@ -2,8 +2,8 @@ package racah
 
 import (
 	"math/big"
+	"math/bits"
 
-	"example.org/couplet/internal/argument"
 	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/square"
 	"example.org/couplet/rational"
@@ -45,7 +45,7 @@ func CheckNineJ(a, b, c, d, e, f, g, h, i rational.Half) (wigner.Verdict, error)
 	if v.Zero() {
 		return v, nil
 	}
-	if twice, array := q.twice(); twice/2&1 == 1 && array.OddSymmetry() {
+	if twice, array := q.twice(); twice/2&1 == 1 && array.LinesEqual() {
 		return wigner.Verdict{Rule: wigner.Symmetry}, nil
 	}
 	if q.exact().IsZero() {
@@ -63,21 +63,11 @@ type nineJ struct {
 // nineJTriads are the places of the rows and columns.
 var nineJTriads = [6][3]int{{0, 1, 2}, {3, 4, 5}, {6, 7, 8}, {0, 3, 6}, {1, 4, 7}, {2, 5, 8}}
 
-func nineJName(place int) string { return "abcdefghi"[place : place+1] }
+var nineJNames = []string{"a", "b", "c", "d", "e", "f", "g", "h", "i"}
 
 // rule returns the first selection rule that is broken, or an error for a malformed argument.
 func (q *nineJ) rule() (wigner.Verdict, *rational.ArgumentError) {
-	for i, j := range q.j {
-		if err := argument.Momentum(q.fn, nineJName(i), j); err != nil {
-			return wigner.Verdict{}, err
-		}
-	}
-	for _, t := range &nineJTriads {
-		if r := wigner.Triad(q.j[t[0]], q.j[t[1]], q.j[t[2]]); r != wigner.NonZero {
-			return wigner.Verdict{Rule: r, Args: nineJName(t[0]) + " " + nineJName(t[1]) + " " + nineJName(t[2])}, nil
-		}
-	}
-	return wigner.Verdict{}, nil
+	return checkTriads(q.fn, nineJNames, q.j[:], nineJTriads[:])
 }
 
 // twice returns twice the arguments and their sum.
@@ -96,27 +86,37 @@ func (q *nineJ) exact() rational.Surd {
 	for _, p := range &nineJTriads {
 		mulTriangle(&f, t[p[0]], t[p[1]], t[p[2]], 1)
 	}
-	var z big.Int
-	return f.SqrtTimesBig(nineJSum(&z, &t))
+	if z, ok := nineJWord(&t); ok {
+		return f.SqrtTimes(z)
+	}
+	return f.SqrtTimesBig(nineJSum(new(big.Int), &t))
+}
+
+// nineJRange returns twice the first and the last x of the sum.
+func nineJRange(t *square.Array) (first, last int) {
+	return max(distance(t[0], t[8]), distance(t[1], t[5]), distance(t[3], t[7])), min(t[0]+t[8], t[1]+t[5], t[3]+t[7])
+}
+
+// nineJFactors returns the three 6j symbols of the sum, x given as twice its value.
+func nineJFactors(t *square.Array, x int) [3]tetrad {
+	a, b, c, d, e, f, g, h, i := t[0], t[1], t[2], t[3], t[4], t[5], t[6], t[7], t[8]
+	return [3]tetrad{
+		{a, i, x, f, b, c}, // { a b c; f i x } with its triad (a i x) in front
+		{b, x, f, d, e, h}, // { d e f; b x h } with (b x f)
+		{x, h, d, g, a, i}, // { g h i; x a d } with (x h d)
+	}
 }
 
 // nineJSum sets z to Σ_x (-1)^(2x) (2x+1) S1 S2 S3, S1 to S3 being the sums in the three 6j symbols,
 // and returns it.
 func nineJSum(z *big.Int, t *square.Array) *big.Int {
-	a, b, c, d, e, f, g, h, i := t[0], t[1], t[2], t[3], t[4], t[5], t[6], t[7], t[8]
-	first := max(distance(a, i), distance(b, f), distance(d, h))
-	last := min(a+i, b+f, d+h)
+	first, last := nineJRange(t)
 	term, factor := new(big.Int), new(big.Int)
 	var s binsum.Quadruple
-	for x := first; x <= last; x += 2 { // twice the x of the formula
-		factors := [3]tetrad{
-			{a, i, x, f, b, c}, // { a b c; f i x } with its triad (a i x) in front
-			{b, x, f, d, e, h}, // { d e f; b x h } with (b x f)
-			{x, h, d, g, a, i}, // { g h i; x a d } with (x h d)
-		}
+	for x := first; x <= last; x += 2 {
 		term.SetInt64(int64(x + 1))
-		for n := range factors {
-			factors[n].sum(&s)
+		for _, k := range nineJFactors(t, x) {
+			k.sum(&s)
 			term.Mul(term, s.Int(factor))
 		}
 		z.Add(z, term)
@@ -125,6 +125,29 @@ func nineJSum(z *big.Int, t *square.Array) *big.Int {
 		z.Neg(z)
 	}
 	return z
+}
+
+// nineJWord returns the same sum where no product in it leaves a word; ok is false elsewhere.
+func nineJWord(t *square.Array) (z int64, ok bool) {
+	first, last := nineJRange(t)
+	room := 63 - bits.Len(uint((last+1)*((last-first)/2+1))) // for the product of three sums
+	var s binsum.Quadruple
+	for x := first; x <= last; x += 2 {
+		term, left := int64(x+1), room
+		for _, k := range nineJFactors(t, x) {
+			k.sum(&s)
+			v, ok := s.Word()
+			if left -= bits.Len64(uint64(max(v, -v))); !ok || left < 0 {
+				return 0, false
+			}
+			term *= v
+		}
+		z += term
+	}
+	if first&1 != 0 {
+		z = -z
+	}
+	return z, true
 }
 
 func distance(a, b int) int { return max(a-b, b-a) }

@@ -1,7 +1,6 @@
 package racah
 
 import (
-	"example.org/couplet/internal/argument"
 	"example.org/couplet/internal/binsum"
 	"example.org/couplet/rational"
 	"example.org/couplet/wigner"
@@ -20,7 +19,10 @@ import (
 //
 // It is zero where one of the triads (j1 j2 j3), (j1 l2 l3), (l1 j2 l3), (l1 l2 j3) breaks a
 // selection rule; [CheckSixJ] says which. It panics with *rational.ArgumentError for a negative
-// argument. Any size is allowed; time grows like the size times the number of terms.
+// argument.
+//
+// Any size is allowed. Time grows like the number of terms times the length of the sum, at most some four
+// times as many bits as the largest argument has units; tables of primes reach to the largest triad.
 func SixJ(j1, j2, j3, l1, l2, l3 rational.Half) rational.Surd {
 	var k tetrad
 	if !k.set(j1, j2, j3, l1, l2, l3) {
@@ -56,8 +58,8 @@ func wPhase(a, b, c, d rational.Half) bool {
 }
 
 // CheckSixJ tells why the 6j symbol of [SixJ] vanishes, or that it does not: the first triad that
-// breaks a selection rule, or that the zero is accidental, for which it computes the symbol. The
-// error, a *rational.ArgumentError, names a malformed argument; CheckSixJ does not panic.
+// breaks a selection rule, or that the zero is accidental, for which it computes the symbol, at the cost
+// of SixJ: whoever takes arguments from strangers limits their size. The error, a *rational.ArgumentError, names a malformed argument; CheckSixJ does not panic.
 func CheckSixJ(j1, j2, j3, l1, l2, l3 rational.Half) (wigner.Verdict, error) {
 	q := sixJ{fn: "racah.CheckSixJ", names: &sixJNames, j: [6]rational.Half{j1, j2, j3, l1, l2, l3}}
 	return q.verdict()
@@ -86,17 +88,7 @@ var sixJTriads = [4][3]int{{0, 1, 2}, {0, 4, 5}, {3, 1, 5}, {3, 4, 2}}
 
 // rule returns the first selection rule that is broken, or an error for a malformed argument.
 func (q *sixJ) rule() (wigner.Verdict, *rational.ArgumentError) {
-	for i, j := range q.j {
-		if err := argument.Momentum(q.fn, q.names[i], j); err != nil {
-			return wigner.Verdict{}, err
-		}
-	}
-	for _, t := range &sixJTriads {
-		if r := wigner.Triad(q.j[t[0]], q.j[t[1]], q.j[t[2]]); r != wigner.NonZero {
-			return wigner.Verdict{Rule: r, Args: q.names[t[0]] + " " + q.names[t[1]] + " " + q.names[t[2]]}, nil
-		}
-	}
-	return wigner.Verdict{}, nil
+	return checkTriads(q.fn, q.names[:], q.j[:], sixJTriads[:])
 }
 
 func (q *sixJ) verdict() (wigner.Verdict, error) {

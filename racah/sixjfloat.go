@@ -16,7 +16,7 @@ func SixJFloat(j1, j2, j3, l1, l2, l3 rational.Half) float64 {
 		forbidden("racah.SixJFloat", &sixJNames, j1, j2, j3, l1, l2, l3)
 		return 0
 	}
-	return k.float()
+	return k.float(false)
 }
 
 // WFloat returns the float64 nearest to the Racah coefficient of [W], to even on a tie, whatever its
@@ -27,11 +27,7 @@ func WFloat(a, b, c, d, e, f rational.Half) float64 {
 		forbidden("racah.WFloat", &wNames, a, b, e, d, c, f)
 		return 0
 	}
-	v := k.float()
-	if wPhase(a, b, c, d) {
-		return -v
-	}
-	return v
+	return k.float(wPhase(a, b, c, d))
 }
 
 // Bounds on the relative error before rounding, derived at smallFront and largeFront.
@@ -43,27 +39,31 @@ const (
 // fallbacks counts the values that only the exact route could round.
 var fallbacks atomic.Int64
 
-// float returns the value: the front in double-double times the integer sum, which is exact, rounded
-// where the error bound allows, and by the exact route elsewhere.
-func (k *tetrad) float() float64 {
+// float returns the value, or its negative: the front in double-double times the integer sum, which is
+// exact, rounded where the error bound allows, and by the exact route elsewhere.
+func (k *tetrad) float(negative bool) float64 {
 	var sum binsum.Quadruple
 	k.sum(&sum)
 	f, ok := 0.0, false
 	if sum.Fits() {
-		f, ok = k.fewWords(&sum)
+		f, ok = k.fewWords(&sum, negative)
 	} else {
-		f, ok = k.manyWords(&sum)
+		f, ok = k.manyWords(&sum, negative)
 	}
-	if !ok {
-		fallbacks.Add(1)
-		f = k.exact().Float64()
+	if ok {
+		return f
 	}
-	return f
+	fallbacks.Add(1)
+	v := k.exact()
+	if negative {
+		v = v.Neg()
+	}
+	return v.Float64()
 }
 
 // fewWords is the route for symbols whose binomials are in the tables. No symbol exceeds 1, so that
 // |S| <= 1/front tells how many words hold the sum.
-func (k *tetrad) fewWords(sum *binsum.Quadruple) (f float64, ok bool) {
+func (k *tetrad) fewWords(sum *binsum.Quadruple, negative bool) (f float64, ok bool) {
 	front := k.smallFront(sum)
 	var s dd.Pair
 	switch {
@@ -73,27 +73,24 @@ func (k *tetrad) fewWords(sum *binsum.Quadruple) (f float64, ok bool) {
 		s = dd.FromMod128(sum.Mod128())
 	default:
 		words := sum.Sum()
-		if high, low, exp, negative := words.Leading(); high != 0 {
-			s = dd.FromWords(high, low).Scale(exp, negative)
+		if high, low, exp, sign := words.Leading(); high != 0 {
+			s = dd.FromWords(high, low).Scale(exp, sign)
 		}
 	}
 	if s.Hi == 0 {
 		return 0, true
 	}
-	return front.Mul(s).Round(smallError)
+	return front.Mul(s.Scale(0, negative)).Round(smallError)
 }
 
-func (k *tetrad) manyWords(sum *binsum.Quadruple) (f float64, ok bool) {
+func (k *tetrad) manyWords(sum *binsum.Quadruple, negative bool) (f float64, ok bool) {
 	words := sum.Sum()
-	high, low, exp, negative := words.Leading()
+	high, low, exp, sign := words.Leading()
 	if high == 0 {
 		return 0, true
 	}
-	s := dd.Scaled{Pair: dd.FromWords(high, low).Normal(), Exp: exp}
-	if f, ok = k.largeFront().Mul(s).Round(largeError); negative {
-		f = -f
-	}
-	return f, ok
+	s := dd.Scaled{Pair: dd.FromWords(high, low).Normal().Scale(0, sign != negative), Exp: exp}
+	return k.largeFront().Mul(s).Round(largeError)
 }
 
 // smallFront returns Δ(aef) Δ(dbf) Δ(dec) / Δ(abc), each triangle coefficient by

@@ -43,8 +43,8 @@ func TestForcedTiers(t *testing.T) {
 				t.Fatalf("%+v, tier %d: %g, %v, exact %g", k, i, got, ok, want)
 			}
 		}
-		for i, tier := range []func(*binsum.Quadruple) (float64, bool){k.fewWords, k.manyWords} {
-			if got, ok := tier(&sum); !ok || math.Float64bits(got) != math.Float64bits(want) {
+		for i, tier := range []func(*binsum.Quadruple, bool) (float64, bool){k.fewWords, k.manyWords} {
+			if got, ok := tier(&sum, false); !ok || math.Float64bits(got) != math.Float64bits(want) {
 				t.Fatalf("%+v, route %d: %g, %v, exact %g", k, i, got, ok, want)
 			}
 		}

@@ -4,7 +4,7 @@ import (
 	"fmt"
 	"math/big"
 	"math/bits"
-	"sync"
+	"sync/atomic"
 )
 
 // Factored is a positive rational number held as the exponents of its prime factors. It is built
@@ -13,8 +13,9 @@ import (
 // themselves would run to thousands of digits, and the squarefree part is read off.
 //
 // The zero value is 1. A Factored is a builder, changed in place by its methods: unlike the values
-// of this package it is not safe for use from several goroutines. It allocates nothing while all
-// its primes are below 313.
+// of this package it must not be copied, and is not safe for use from several goroutines. It allocates
+// nothing while all its primes are below 313. The exponents are 32 bits wide; a product of so many
+// factors that one leaves that range is wrong.
 type Factored struct {
 	few   [inlinePrimes]int32 // exponents of the first primes, in order
 	many  []int32             // exponents of the primes after those
@@ -27,9 +28,19 @@ const (
 	factorialTable = firstMany
 )
 
-// smallFactorials holds, for every n < 313, the exponents of n! on the first 64 primes, and how many
-// of these primes are at most n.
-var smallFactorials = sync.OnceValue(func() *[factorialTable]factorial {
+var smallTable atomic.Pointer[[factorialTable]factorial]
+
+// smallFactorials returns, for every n < 313, the exponents of n! on the first 64 primes, and how many of
+// these primes are at most n. The table is built on the first call; after that this is one load, where
+// sync.OnceValue makes two calls.
+func smallFactorials() *[factorialTable]factorial {
+	if t := smallTable.Load(); t != nil {
+		return t
+	}
+	return newSmallFactorials()
+}
+
+func newSmallFactorials() *[factorialTable]factorial {
 	var t [factorialTable]factorial
 	primes := primesTo(firstMany)
 	for n := range t {
@@ -38,8 +49,9 @@ var smallFactorials = sync.OnceValue(func() *[factorialTable]factorial {
 			t[n].exponents[i] = uint16(legendre(uint32(n), primes[i]))
 		}
 	}
+	smallTable.Store(&t) // racing first calls store equal tables
 	return &t
-})
+}
 
 type factorial struct {
 	exponents [inlinePrimes]uint16
@@ -56,11 +68,13 @@ func legendre(n, p uint32) int32 {
 	return int32(e)
 }
 
-// MulFactorial multiplies f by (n!)^power. It panics with *ArgumentError for negative n.
+// MulFactorial multiplies f by (n!)^power. It panics with *ArgumentError unless 0 <= n < 2^32 and
+// |n*power| < 2^30.
 func (f *Factored) MulFactorial(n, power int) {
-	if n < 0 {
-		panic(&ArgumentError{"rational.Factored.MulFactorial", "n", fmt.Sprint(n), "n >= 0"})
+	if n < 0 || uint64(n) > 1<<32-1 {
+		panic(&ArgumentError{"rational.Factored.MulFactorial", "n", fmt.Sprint(n), "from 0 to 4294967295"})
 	}
+	mustPower("rational.Factored.MulFactorial", n, power)
 	if n < factorialTable {
 		row := &smallFactorials()[n]
 		few := f.few[:row.count]
@@ -81,11 +95,15 @@ func (f *Factored) MulFactorial(n, power int) {
 	}
 }
 
-// MulInt multiplies f by n^power. It panics with *ArgumentError unless 1 <= n < 2^32.
+// MulInt multiplies f by n^power. It panics with *ArgumentError unless 1 <= n < 2^32 and |power| < 2^25.
+//
+// A prime factor p of n makes the lists of primes and of exponents reach to p, which takes seconds and
+// gigabytes for the largest.
 func (f *Factored) MulInt(n, power int) {
 	if n < 1 || uint64(n) > 1<<32-1 {
 		panic(&ArgumentError{"rational.Factored.MulInt", "n", fmt.Sprint(n), "from 1 to 4294967295"})
 	}
+	mustPower("rational.Factored.MulInt", 32, power)
 	rest := uint32(n)
 	primes := primesTo(firstMany)
 	for i := 0; rest > 1; i++ {
@@ -102,6 +120,16 @@ func (f *Factored) MulInt(n, power int) {
 			rest /= p
 			f.mulPrime(i, power)
 		}
+	}
+}
+
+// mustPower panics where power times the largest exponent in n! does not fit.
+func mustPower(fn string, n, power int) {
+	if power >= -1<<10 && power <= 1<<10 && n < 1<<20 {
+		return
+	}
+	if p := int64(power); p <= -1<<30 || p >= 1<<30 || int64(n)*max(p, -p) >= 1<<30 {
+		panic(&ArgumentError{fn, "power", fmt.Sprint(power), "powers that keep every exponent below 2^30"})
 	}
 }
 
@@ -180,7 +208,6 @@ func (f *Factored) SqrtTimesBig(n *big.Int) Surd {
 		return Surd{}
 	}
 	var product struct{ num, den, rad wordProduct }
-	cancel := make([]primePower, 0, f.inUse+len(f.many))
 	f.each(func(p uint, e int32) {
 		if e&1 != 0 {
 			product.rad.mul(p, 1)
@@ -188,14 +215,11 @@ func (f *Factored) SqrtTimesBig(n *big.Int) Surd {
 		if k := e >> 1; k > 0 {
 			product.num.mul(p, k)
 		} else if k < 0 {
-			cancel = append(cancel, primePower{p, -k})
+			product.den.mul(p, -k)
 		}
 	})
 	rest := new(big.Int).Set(n)
-	removeCommon(rest, cancel)
-	for _, c := range cancel {
-		product.den.mul(c.p, c.e)
-	}
+	cancel(rest, product.den.words)
 	if len(product.num.words) > 0 {
 		rest.Mul(rest, product.num.int())
 	}

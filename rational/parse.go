@@ -28,7 +28,8 @@ func (e *ParseError) Error() string {
 // than 2^64; reading one that has two large prime factors takes about a millisecond. Every symbol
 // with j1+j2+j3 below 65536 stays within this.
 //
-// The error is a *[ParseError], and names the byte at which reading stopped.
+// The error is a *[ParseError], and names the byte at which reading stopped, 0 where the text reads but
+// is no single real term.
 func ParseSurd(text string) (Surd, error) {
 	z, err := parse("rational.ParseSurd", text)
 	if err != nil {
@@ -65,27 +66,31 @@ func ParseComplex(text string) (Complex, error) { return parse("rational.ParseCo
 //	number = digits [ "." digits ]
 func parse(fn, text string) (Complex, error) {
 	p := &parser{fn: fn, text: text}
-	var z Complex
+	var re, im []Surd
 	negative := p.accept('-')
 	if !negative {
 		p.accept('+')
 	}
 	for {
-		t, err := p.term()
+		t, phase, err := p.term()
 		if err != nil {
 			return Complex{}, err
 		}
-		if negative {
+		if negative != (phase&2 != 0) {
 			t = t.Neg()
 		}
-		z = z.Add(t)
+		if phase&1 == 0 {
+			re = append(re, t)
+		} else {
+			im = append(im, t)
+		}
 		switch {
 		case p.accept('+'):
 			negative = false
 		case p.accept('-'):
 			negative = true
 		case p.pos == len(text):
-			return z, nil
+			return Complex{SumOf(re...), SumOf(im...)}, nil
 		default:
 			return Complex{}, p.fail("+, -, *, / or the end of the text")
 		}
@@ -116,13 +121,14 @@ func (p *parser) accept(c byte) bool {
 	return true
 }
 
-func (p *parser) term() (Complex, error) {
-	value, phase, err := p.factor()
+// term returns the value of a term and its power of i.
+func (p *parser) term() (value Surd, phase int, err error) {
+	value, phase, err = p.factor()
 	for err == nil {
 		divide := false
 		if !p.accept('*') {
 			if divide = p.accept('/'); !divide {
-				return IPow(phase).Scale(value), nil
+				return value, phase, nil
 			}
 		}
 		start := p.pos
@@ -133,14 +139,14 @@ func (p *parser) term() (Complex, error) {
 		}
 		if divide && v.IsZero() {
 			p.pos = start
-			return Complex{}, p.fail("a divisor other than zero")
+			return Surd{}, 0, p.fail("a divisor other than zero")
 		}
 		if divide {
 			v, ph = v.Inv(), -ph
 		}
 		value, phase = value.Mul(v), phase+ph
 	}
-	return Complex{}, err
+	return Surd{}, 0, err
 }
 
 // factor returns the value of a factor and its power of i.

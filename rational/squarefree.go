@@ -69,27 +69,67 @@ func sqrtInt(n *big.Int) (Surd, error) {
 		return newSurd(new(big.Int).SetUint64(outer), big.NewInt(1), new(big.Int).SetUint64(inner)), nil
 	}
 	rest := new(big.Int).Set(n)
-	primes := primesTo(trialLimit)
-	powers := make([]primePower, countTo(primes, trialLimit))
-	for i := range powers {
-		powers[i] = primePower{uint(primes[i]), math.MaxInt32}
-	}
-	removeCommon(rest, powers)
+	outer, inner := removePrimes(rest)
 	if !rest.IsUint64() {
 		return Surd{}, fmt.Errorf("radicand %s is 2^64 or more after division by the primes below %d",
 			abbreviate(n.String()), trialLimit)
-	}
-	var outer, inner wordProduct
-	for _, c := range powers {
-		e := math.MaxInt32 - c.e
-		outer.mul(c.p, e/2)
-		inner.mul(c.p, e%2)
 	}
 	o, i := splitSquare(rest.Uint64())
 	big64 := func(n uint64) *big.Int { return new(big.Int).SetUint64(n) }
 	// The primes of rest are all above the trial limit, so the product of the two squarefree parts
 	// is squarefree.
 	return newSurd(big64(o).Mul(big64(o), outer.int()), big.NewInt(1), big64(i).Mul(big64(i), inner.int())), nil
+}
+
+// removePrimes divides n by all primes below the trial limit as often as it goes, and returns what that
+// took out, as the largest outer with outer^2*inner.
+func removePrimes(n *big.Int) (outer, inner wordProduct) {
+	primes := primesTo(trialLimit)
+	primes = primes[:countTo(primes, trialLimit)]
+	var quotient, divisor, rest big.Int
+	for len(primes) > 0 {
+		// One pass over n finds which primes of a word divide it.
+		group, count := uint(primes[0]), 1
+		for ; count < len(primes); count++ {
+			hi, lo := bits.Mul(group, uint(primes[count]))
+			if hi != 0 {
+				break
+			}
+			group = lo
+		}
+		residue := remainder(n, group)
+		for _, p := range primes[:count] {
+			if residue%uint(p) != 0 {
+				continue
+			}
+			// Powers of p from the largest in a word down: a division takes out many factors at once.
+			e := int32(0)
+			for power, k := largestPower(uint(p)); k > 0; {
+				if quotient.QuoRem(n, divisor.SetUint64(uint64(power)), &rest); rest.Sign() == 0 {
+					n.Set(&quotient)
+					e += k
+				} else {
+					power, k = power/uint(p), k-1
+				}
+			}
+			outer.mul(uint(p), e/2)
+			inner.mul(uint(p), e%2)
+		}
+		primes = primes[count:]
+	}
+	return outer, inner
+}
+
+// largestPower returns the largest power of p in a word, and its exponent.
+func largestPower(p uint) (power uint, k int32) {
+	power, k = p, 1
+	for {
+		hi, lo := bits.Mul(power, p)
+		if hi != 0 {
+			return power, k
+		}
+		power, k = lo, k+1
+	}
 }
 
 // abbreviate shortens the digits of a long number for a message.

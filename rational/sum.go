@@ -3,6 +3,8 @@ package rational
 import (
 	"cmp"
 	"math/big"
+	"math/bits"
+	"slices"
 )
 
 // Sum is an exact finite sum of surds, one for each radicand. It is zero exactly when it has no
@@ -18,11 +20,17 @@ type Sum struct {
 
 // SumOf returns the sum of its arguments, 0 for none.
 func SumOf(terms ...Surd) Sum {
-	var z Sum
-	for _, t := range terms {
-		z = z.Add(t.Sum())
+	sorted := slices.DeleteFunc(slices.Clone(terms), Surd.IsZero)
+	slices.SortFunc(sorted, cmpRadicand)
+	var z []Surd
+	for _, t := range sorted {
+		if last := len(z) - 1; last < 0 || cmpRadicand(z[last], t) != 0 {
+			z = append(z, t)
+		} else if z[last] = addCoeff(z[last], t); z[last].IsZero() {
+			z = z[:last]
+		}
 	}
-	return z
+	return Sum{terms: z}
 }
 
 // Terms returns the terms in the order of their radicands, as a fresh slice.
@@ -171,9 +179,38 @@ func cmpRadicand(s, t Surd) int {
 
 // addCoeff returns s + t for non-zero surds of one radicand.
 func addCoeff(s, t Surd) Surd {
+	if s.wide == nil && t.wide == nil {
+		if z, ok := addWords(s, t); ok {
+			return z
+		}
+	}
 	n1, d1, rad := s.parts()
 	n2, d2, _ := t.parts()
 	r := new(big.Rat).SetFrac(n1, d1)
 	r.Add(r, new(big.Rat).SetFrac(n2, d2))
 	return newSurd(r.Num(), r.Denom(), rad)
 }
+
+// addWords is addCoeff within words; ok is false where an intermediate result does not fit.
+func addWords(s, t Surd) (z Surd, ok bool) {
+	g := gcd(s.den, t.den)
+	h1, a := bits.Mul64(magnitude(s.num), t.den/g)
+	h2, b := bits.Mul64(magnitude(t.num), s.den/g)
+	h3, den := bits.Mul64(s.den, t.den/g)
+	if h1|h2|h3 != 0 || a > maxNum || b > maxNum {
+		return Surd{}, false
+	}
+	num := signed(a, s.num < 0) + signed(b, t.num < 0)
+	if num == 0 {
+		return Surd{}, true
+	}
+	if (num < 0) != (s.num < 0) && (num < 0) != (t.num < 0) || magnitude(num) > maxNum {
+		return Surd{}, false // the sum wrapped around
+	}
+	m := magnitude(num)
+	reduce(&m, &den)
+	return Surd{num: signed(m, num < 0), den: den, rad: s.rad}, true
+}
+
+// Complex returns s as a Complex.
+func (s Sum) Complex() Complex { return Complex{Re: s} }

@@ -82,7 +82,7 @@ func TestSumArithmetic(t *testing.T) {
 	}
 	mustPanic(t, "rational.Sum.Quo: t = 0; allowed: anything but zero", func() { list[1].Quo(rational.Surd{}) })
 	mustPanic(t, "rational.Sum.QuoSum: t = 0; allowed: anything but zero", func() { list[1].QuoSum(rational.Sum{}) })
-	mustPanic(t, "rational.Sum.Float: prec = 0; allowed: from 1 to 2147483648", func() { list[1].Float(0) })
+	mustPanic(t, "rational.Sum.Float: prec = 0; allowed: from 1 to 16777216", func() { list[1].Float(0) })
 }
 
 // Numbers that float arithmetic takes for zero.

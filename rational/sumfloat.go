@@ -1,9 +1,6 @@
 package rational
 
-import (
-	"fmt"
-	"math/big"
-)
+import "math/big"
 
 // Sign returns -1, 0 or +1. Zero is decided by the canonical form, the sign of anything else by
 // intervals that are narrowed until they leave out zero.
@@ -38,11 +35,9 @@ func (s Sum) Float64() float64 {
 }
 
 // Float returns s rounded to nearest even at the given precision in bits. It panics with
-// *ArgumentError for prec = 0 or prec > 2^31.
+// *ArgumentError for prec = 0 or prec > 2^24.
 func (s Sum) Float(prec uint) *big.Float {
-	if prec == 0 || prec > 1<<31 {
-		panic(&ArgumentError{"rational.Sum.Float", "prec", fmt.Sprint(prec), "from 1 to 2147483648"})
-	}
+	mustPrec("rational.Sum.Float", prec)
 	if v, ok := s.Surd(); ok {
 		return v.Float(prec)
 	}
@@ -63,7 +58,7 @@ func (s Sum) refine(prec uint, done func(lo, hi *big.Float) bool) {
 		hi := new(big.Float).SetPrec(prec).SetMode(big.ToPositiveInf)
 		for _, t := range s.terms {
 			// t is within an ulp of its rounded value, which one step in the last place covers.
-			v := t.Float(prec)
+			v := t.rounded(prec)
 			ulp := new(big.Float).SetMantExp(big.NewFloat(1), v.MantExp(nil)-int(prec))
 			lo.Add(lo, new(big.Float).SetPrec(2*prec).Sub(v, ulp))
 			hi.Add(hi, new(big.Float).SetPrec(2*prec).Add(v, ulp))

@@ -18,16 +18,24 @@ func (s Surd) Float64() float64 {
 }
 
 // Float returns s rounded to nearest even at the given precision in bits. It panics with
-// *ArgumentError for prec = 0 or prec > 2^31.
+// *ArgumentError for prec = 0 or prec > 2^24.
 func (s Surd) Float(prec uint) *big.Float {
-	if prec == 0 || prec > 1<<31 {
-		panic(&ArgumentError{"rational.Surd.Float", "prec", fmt.Sprint(prec), "from 1 to 2147483648"})
-	}
+	mustPrec("rational.Surd.Float", prec)
+	return s.rounded(prec)
+}
+
+func (s Surd) rounded(prec uint) *big.Float {
 	z := new(big.Float).SetPrec(prec)
 	if s.isRational() {
 		return z.SetRat(s.Coeff())
 	}
 	return z.Set(s.truncated(prec + 3))
+}
+
+func mustPrec(fn string, prec uint) {
+	if prec == 0 || prec > 1<<24 {
+		panic(&ArgumentError{fn, "prec", fmt.Sprint(prec), "from 1 to 16777216"})
+	}
 }
 
 // truncated returns an irrational s cut off after at least prec bits, with one more bit set that

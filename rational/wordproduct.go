@@ -49,43 +49,21 @@ func treeProduct(words []uint) *big.Int {
 	return z
 }
 
-// primePower is p^e.
-type primePower struct {
-	p uint
-	e int32
-}
-
-// removeCommon divides n by the largest divisor that it shares with the product of the powers, and
-// lowers the powers accordingly.
+// cancel divides n and the words by what n shares with their product.
 //
-// Residues modulo whole words of primes find the primes that divide n with one pass over n for
-// every word instead of one for every prime.
-func removeCommon(n *big.Int, powers []primePower) {
+// gcd(n, w) = gcd(n mod w, w) takes one pass over n for a whole word of primes.
+func cancel(n *big.Int, words []uint) {
 	var quotient, divisor, rest big.Int // here, so that they are allocated once
-	for start := 0; start < len(powers); {
-		group, end := powers[start].p, start+1
-		for ; end < len(powers); end++ {
-			hi, lo := bits.Mul(group, powers[end].p)
-			if hi != 0 {
-				break
-			}
-			group = lo
+	for i, w := range words {
+		g := w
+		if r := remainder(n, w); r != 0 {
+			g = uint(gcd(uint64(r), uint64(w)))
 		}
-		residue := remainder(n, group)
-		for i := start; i < end; i++ {
-			c := &powers[i]
-			if residue%c.p != 0 {
-				continue
-			}
-			divisor.SetUint64(uint64(c.p))
-			for ; c.e > 0; c.e-- {
-				if quotient.QuoRem(n, &divisor, &rest); rest.Sign() != 0 {
-					break
-				}
-				n.Set(&quotient)
-			}
+		if g > 1 {
+			quotient.QuoRem(n, divisor.SetUint64(uint64(g)), &rest)
+			n.Set(&quotient)
+			words[i] = w / g
 		}
-		start = end
 	}
 }
 

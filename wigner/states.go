@@ -83,8 +83,8 @@ func mustMomentum(fn, name string, j rational.Half) {
 // halves yields first/2, first/2+1, ... up to last/2.
 func halves(first, last int) iter.Seq[rational.Half] {
 	return func(yield func(rational.Half) bool) {
-		for n := first; n <= last; n += 2 {
-			if !yield(rational.Halves(n)) {
+		for i := range (last-first)/2 + 1 { // a counter of halves could overflow an int of 32 bits
+			if !yield(rational.Halves(first + 2*i)) {
 				return
 			}
 		}

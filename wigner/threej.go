@@ -19,8 +19,10 @@ import (
 // with J = j1+j2+j3, n1 = J-2j3, n2 = J-2j2, n3 = J-2j1.
 //
 // It is zero where a triad or a projection breaks a selection rule; [CheckThreeJ] says which. It
-// panics with *rational.ArgumentError for a negative j and for a j-m that is not an integer. Any j
-// is allowed; time grows like J times the number of terms, memory like J.
+// panics with *rational.ArgumentError for a negative j and for a j-m that is not an integer.
+//
+// Any j is allowed. Time grows like the number of terms, one more than the smallest of ji±mi and n1 to n3,
+// times the length of the sum, at most J bits; tables of primes and of their exponents reach to J.
 func ThreeJ(j1, j2, j3, m1, m2, m3 rational.Half) rational.Surd {
 	var r regge
 	if !r.set(j1, j2, j3, m1, m2, m3) {
@@ -48,7 +50,8 @@ func ClebschGordan(j1, m1, j2, m2, j, m rational.Half) rational.Surd {
 
 // CheckThreeJ tells why the 3j symbol of [ThreeJ] vanishes, or that it does not: the first broken
 // selection rule, the symmetry that changes its sign, or that its zero is accidental. To tell an
-// accidental zero it computes the symbol. The error, a *rational.ArgumentError, names a malformed
+// accidental zero it computes the symbol, at the cost of ThreeJ: whoever takes arguments from strangers
+// limits their size. The error, a *rational.ArgumentError, names a malformed
 // argument; CheckThreeJ does not panic.
 func CheckThreeJ(j1, j2, j3, m1, m2, m3 rational.Half) (Verdict, error) {
 	q := symbol{"wigner.CheckThreeJ", &threeJNames, [3]rational.Half{j1, j2, j3}, [3]rational.Half{m1, m2, m3}}
@@ -127,7 +130,7 @@ func (q *symbol) verdict() (Verdict, error) {
 	}
 	var r regge
 	r.set(q.j[0], q.j[1], q.j[2], q.m[0], q.m[1], q.m[2])
-	if r.total()&1 == 1 && square.Array(r).OddSymmetry() {
+	if r.total()&1 == 1 && square.Array(r).LinesEqual() {
 		return Verdict{Rule: Symmetry}, nil
 	}
 	if r.exact(false).IsZero() {
@@ -168,16 +171,52 @@ func (r *regge) sum() binsum.Triple {
 	return binsum.Triple{N1: r[2], N2: r[1], N3: r[0], A: r[3], B: r[7]}
 }
 
-// negative reports whether there is a sign - before the sum: (-1)^(j1-j2-m3) of the 3j symbol, where
-// j1-j2-m3 = (j1+m1) - (j2-m2). The coefficient has none, since the phases of DLMF (34.1.1) and (34.2.4)
-// cancel.
-func (r *regge) negative(coefficient bool) bool { return !coefficient && (r[6]-r[4])&1 != 0 }
+// parity returns n for the phase (-1)^n of the 3j symbol in the orientation of the square: j1-j2-m3, which
+// is (j1+m1) - (j2-m2).
+func (r *regge) parity() int { return (r[6] - r[4]) & 1 }
+
+// sign returns n for the sign (-1)^n before the sum of r, or of an even image of r. A coefficient has none
+// in its own orientation, since the phases of DLMF (34.1.1) and (34.2.4) cancel.
+func (r *regge) sign(image *regge, coefficient bool) int {
+	if coefficient {
+		return image.parity() ^ r.parity()
+	}
+	return image.parity()
+}
+
+// shortest returns the even image, cyclic in the rows and perhaps reflected in the diagonal, whose sum
+// needs the fewest bits. These keep the value of the 3j symbol. Where one momentum is small beside the
+// others, or a projection close to the largest, that is a few bits instead of some j1+j2+j3.
+func (r *regge) shortest() regge {
+	best, sum := *r, r.sum()
+	least := sum.Bits()
+	for i := 1; i < 6; i++ {
+		var image regge
+		for row := range 3 {
+			for col := range 3 {
+				from := 3*((row+i)%3) + col
+				if i >= 3 {
+					from = 3*col + (row+i)%3
+				}
+				image[3*row+col] = r[from]
+			}
+		}
+		sum = image.sum()
+		if bits := sum.Bits(); bits < least {
+			best, least = image, bits
+		}
+	}
+	return best
+}
 
 // exact returns the value as a 3j symbol or as a Clebsch-Gordan coefficient.
 func (r *regge) exact(coefficient bool) rational.Surd {
-	sum := r.sum()
+	image := *r
+	if r.total() > 66 {
+		image = r.shortest()
+	}
 	var front rational.Factored // squared
-	for i, n := range r {
+	for i, n := range image {
 		if i < 3 {
 			front.MulFactorial(n, -1)
 		} else {
@@ -188,8 +227,9 @@ func (r *regge) exact(coefficient bool) rational.Surd {
 	if coefficient {
 		front.MulInt(r.twiceJ3()+1, 1)
 	}
+	sum := image.sum()
 	v := sum.Sqrt(&front)
-	if r.negative(coefficient) {
+	if r.sign(&image, coefficient) != 0 {
 		return v.Neg()
 	}
 	return v

@@ -66,7 +66,7 @@ func (r *regge) oneWord(coefficient bool) (f float64, ok bool) {
 	if s == 0 {
 		return 0, true
 	}
-	if r.negative(coefficient) {
+	if r.sign(r, coefficient) != 0 {
 		s = -s
 	}
 	return r.smallFront(dd.FromInt64(s), coefficient).Round(smallError)
@@ -78,21 +78,26 @@ func (r *regge) twoWords(coefficient bool) (f float64, ok bool) {
 	if s.Hi == 0 {
 		return 0, true
 	}
-	if r.negative(coefficient) {
+	if r.sign(r, coefficient) != 0 {
 		s.Hi, s.Lo = -s.Hi, -s.Lo
 	}
 	return r.smallFront(s, coefficient).Round(smallError)
 }
 
 func (r *regge) manyWords(coefficient bool) (f float64, ok bool) {
-	sum := r.sum()
+	image := r.shortest()
+	sum := image.sum()
 	words := sum.Sum()
 	high, low, exp, negative := words.Leading()
 	if high == 0 {
 		return 0, true
 	}
 	s := dd.Scaled{Pair: dd.FromWords(high, low).Normal(), Exp: exp}
-	if f, ok = r.largeFront(coefficient).Mul(s).Round(largeError); negative != r.negative(coefficient) {
+	front := image.largeFront()
+	if coefficient {
+		front = front.Mul(dd.Scaled{Pair: dd.Factorials(r.total() + 1).Sqrt[r.twiceJ3()+1]})
+	}
+	if f, ok = front.Mul(s).Round(largeError); negative != (r.sign(&image, coefficient) != 0) {
 		f = -f
 	}
 	return f, ok
@@ -120,10 +125,10 @@ func (r *regge) smallFront(s dd.Pair, coefficient bool) dd.Pair {
 	return u.Mul(s).Mul(v.Mul(w))
 }
 
-// largeFront returns the square root of the same quotient of factorials: eleven factors with an error of
-// u^2, and eleven multiplications, that of the sum among them, with 5 u^2. With 2 for the sum and 2 for
-// the rounding that is below 2^7 u^2 = 2^-99.
-func (r *regge) largeFront(coefficient bool) dd.Scaled {
+// largeFront returns the square root of the same quotient of factorials. It and sqrt(2j3+1) are eleven
+// factors with an error of u^2, and eleven multiplications, that of the sum among them, with 5 u^2. With 2
+// for the sum and 2 for the rounding that is below 2^7 u^2 = 2^-99.
+func (r *regge) largeFront() dd.Scaled {
 	t := dd.Factorials(r.total() + 1)
 	z := t.Inverse[r.total()+1]
 	for i, n := range r {
@@ -132,9 +137,6 @@ func (r *regge) largeFront(coefficient bool) dd.Scaled {
 		} else {
 			z = z.Mul(t.Root[n])
 		}
-	}
-	if coefficient {
-		z = z.Mul(dd.Scaled{Pair: t.Sqrt[r.twiceJ3()+1]})
 	}
 	return z
 }

@@ -217,3 +217,6 @@ func BinomialBits(top, low int) int {
 	}
 	return min(top, low*bits.Len(uint(3*top/low)))
 }
+
+// largestBits returns a b with C(top, low) < 2^b for all low between the given ones.
+func largestBits(top, low, high int) int { return BinomialBits(top, min(max(top/2, low), high)) }

@@ -62,6 +62,14 @@ func (s *Quadruple) Mod128() (high, low uint64) {
 	return high, low
 }
 
+// Word returns S where a signed word is sure to hold it; ok is false elsewhere.
+func (s *Quadruple) Word() (v int64, ok bool) {
+	if !s.inWord() {
+		return 0, false
+	}
+	return int64(s.Mod64()), true
+}
+
 // Int sets z to S and returns it.
 func (s *Quadruple) Int(z *big.Int) *big.Int {
 	if s.inWord() {
@@ -80,9 +88,6 @@ func (s *Quadruple) Sqrt(f *rational.Factored) rational.Surd {
 }
 
 // Sum describes S for the evaluation in as many words as it takes.
-//
-// The tops of the last three binomials add up to T, so that the sum of their products is at most
-// C(T, floor(T/2)), by Vandermonde's identity; the first binomial is largest at the last t.
 func (s *Quadruple) Sum() Sum {
 	first, last := s.limits()
 	return Sum{
@@ -95,12 +100,23 @@ func (s *Quadruple) Sum() Sum {
 			{Top: s.N3, Low: first - s.S3, Move: LowUp},
 		},
 		Negative: first&1 != 0,
-		Bits:     BinomialBits(last+1, s.T+1) + BinomialBits(s.T, s.T/2),
+		Bits:     s.bits(),
 	}
 }
 
-// inWord reports whether a signed word is sure to hold S.
-func (s *Quadruple) inWord() bool {
-	_, last := s.limits()
-	return s.Fits() && BinomialBits(last+1, s.T+1)+BinomialBits(s.T, s.T/2) <= 63
+// bits returns a b for which the absolute values of the terms add up to less than 2^b.
+//
+// The first binomial is largest at the last t. Of two of the others the products add up to one binomial,
+// by Vandermonde's identity, and the third is at most its largest value on the way, in three ways; all
+// three together add up to at most C(T, floor(T/2)), by the same identity.
+func (s *Quadruple) bits() int {
+	first, last := s.limits()
+	return BinomialBits(last+1, s.T+1) + min(
+		BinomialBits(s.T, s.T/2),
+		BinomialBits(s.N1+s.N2, s.N2+s.S2-s.S1)+largestBits(s.N3, first-s.S3, last-s.S3),
+		BinomialBits(s.N2+s.N3, s.N3+s.S3-s.S2)+largestBits(s.N1, first-s.S1, last-s.S1),
+		BinomialBits(s.N3+s.N1, s.N1+s.S1-s.S3)+largestBits(s.N2, first-s.S2, last-s.S2))
 }
+
+// inWord reports whether a signed word is sure to hold S.
+func (s *Quadruple) inWord() bool { return s.Fits() && s.bits() <= 63 }

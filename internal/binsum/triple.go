@@ -72,12 +72,8 @@ func (s *Triple) Sqrt(f *rational.Factored) rational.Surd {
 }
 
 // Sum describes S for the evaluation in as many words as it takes.
-//
-// The absolute values of the terms add up to at most C(N1+N2, A) max_i C(N3, i), by Vandermonde's
-// identity, and that is at most C(N, floor(N/2)) with N = N1+N2+N3, by the same.
 func (s *Triple) Sum() Sum {
 	first, last := s.limits()
-	n := s.N1 + s.N2 + s.N3
 	return Sum{
 		Terms: last - first + 1,
 		Count: 3,
@@ -87,9 +83,27 @@ func (s *Triple) Sum() Sum {
 			{Top: s.N3, Low: s.B - first, Move: LowDown},
 		},
 		Negative: first&1 != 0,
-		Bits:     BinomialBits(n, n/2),
+		Bits:     s.Bits(),
 	}
 }
 
-// inWord reports whether a signed word is sure to hold S: |S| <= C(66, 33) < 2^63.
-func (s *Triple) inWord() bool { return s.N1+s.N2+s.N3 <= 66 }
+// Bits returns a b for which the absolute values of the terms add up to less than 2^b.
+//
+// Of two of the three binomials the products add up to one binomial, by Vandermonde's identity; the third
+// is at most its largest value on the way: Σ_k C(N1, k) C(N2, A-k) C(N3, B-k) <= C(N1+N2, A) max C(N3, B-k),
+// and two more such bounds, of which the smallest counts. The first is at most C(N, floor(N/2)) with
+// N = N1+N2+N3, by the same identity.
+func (s *Triple) Bits() int {
+	first, last := s.limits()
+	n := s.N1 + s.N2 + s.N3
+	return min(
+		BinomialBits(n, n/2),
+		BinomialBits(s.N1+s.N2, s.A)+largestBits(s.N3, s.B-last, s.B-first),
+		BinomialBits(s.N1+s.N3, s.B)+largestBits(s.N2, s.A-last, s.A-first),
+		BinomialBits(s.N2+s.N3, s.A+s.N3-s.B)+largestBits(s.N1, first, last))
+}
+
+// inWord reports whether a signed word is sure to hold S: for N1+N2+N3 <= 66, |S| <= C(66, 33) < 2^63.
+func (s *Triple) inWord() bool {
+	return s.N1+s.N2+s.N3 <= 66 || max(s.N1, s.N2, s.N3) < tableTops && s.Bits() <= 63
+}

@@ -1,43 +1,19 @@
-// Package square holds the 72 permutations of a three by three array of numbers, under which a 9j
-// symbol, and a 3j symbol written as Regge's square, keep their value up to a sign: permutations of
-// rows and of columns, and the reflection in the diagonal.
+// Package square knows the symmetries of a three by three array of numbers: a 9j symbol, or a 3j symbol
+// written as Regge's square. An exchange of two rows or of two columns keeps the value of either up to a
+// sign.
 package square
 
 // Array is read row by row.
 type Array [9]int
 
-var permutations = [6]struct {
-	order [3]int
-	odd   bool
-}{
-	{[3]int{0, 1, 2}, false}, {[3]int{1, 2, 0}, false}, {[3]int{2, 0, 1}, false},
-	{[3]int{1, 0, 2}, true}, {[3]int{0, 2, 1}, true}, {[3]int{2, 1, 0}, true},
-}
-
-// All calls yield with each of the 72 arrays that the permutations make of a, and with whether the
-// permutation is odd: the reflection counts as even, the exchange of two rows or columns as odd.
-func (a Array) All(yield func(b Array, odd bool) bool) {
-	for _, rows := range permutations {
-		for _, cols := range permutations {
-			var b, reflected Array
-			for i := range 3 {
-				for j := range 3 {
-					v := a[3*rows.order[i]+cols.order[j]]
-					b[3*i+j], reflected[3*j+i] = v, v
-				}
-			}
-			odd := rows.odd != cols.odd
-			if !yield(b, odd) || !yield(reflected, odd) {
-				return
-			}
-		}
-	}
-}
-
-// OddSymmetry reports whether an odd permutation leaves a as it is.
-func (a Array) OddSymmetry() bool {
-	for b, odd := range a.All {
-		if odd && b == a {
+// LinesEqual reports whether two rows, or two columns, are equal: their exchange then changes nothing but
+// the sign. Every array that any odd one of the 72 symmetries leaves alone is of this kind.
+func (a Array) LinesEqual() bool {
+	for _, p := range [3][2]int{{0, 1}, {1, 2}, {2, 0}} {
+		i, j := p[0], p[1]
+		rows := a[3*i] == a[3*j] && a[3*i+1] == a[3*j+1] && a[3*i+2] == a[3*j+2]
+		columns := a[i] == a[j] && a[3+i] == a[3+j] && a[6+i] == a[6+j]
+		if rows || columns {
 			return true
 		}
 	}
