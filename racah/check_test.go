@@ -112,6 +112,15 @@ func TestVerdictsAndPanics(t *testing.T) {
 	if err != nil || v.Rule != wigner.Symmetry {
 		t.Errorf("%v, %v", v, err)
 	}
+	// Of two broken triads the first counts, rows before columns.
+	v, err = racah.CheckNineJ(i(1), i(1), i(1), i(1), i(1), i(1), i(1), i(5), i(9))
+	if err != nil || v.Args != "g h i" {
+		t.Errorf("%v, %v", v, err)
+	}
+	v, err = racah.CheckNineJ(i(1), i(1), i(1), i(1), i(1), i(1), i(4), i(4), i(4))
+	if err != nil || v.Args != "a d g" {
+		t.Errorf("%v, %v", v, err)
+	}
 	for want, f := range map[string]func(){
 		"racah.SixJ: l2 = -1; allowed: an integer or half-integer >= 0": func() { racah.SixJ(i(1), i(1), i(1), i(1), i(-1), i(1)) },
 		"racah.W: c = -1/2; allowed: an integer or half-integer >= 0":   func() { racah.W(i(1), i(1), h(-1), i(1), i(1), i(1)) },

@@ -14,8 +14,8 @@
 // squarefree, the terms of a sum in the order of their radicands. == does not compile on Surd, Sum
 // and Complex; their Equal methods compare, and Key gives a text for maps.
 //
-// A value that fits into 64-bit words is held in them and costs no allocation; larger ones stand
-// behind a pointer. The two are told apart only by speed.
+// A value that fits into 64-bit words is held in them, larger ones stand behind a pointer. The two are
+// told apart only by speed: products and quotients of the former allocate nothing.
 //
 // Malformed arguments (division by zero, an index out of range) panic with *[ArgumentError];
 // functions that read text return errors instead.

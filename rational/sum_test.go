@@ -148,6 +148,69 @@ func TestSumFloat64(t *testing.T) {
 	}
 }
 
+// sqrt(r) and a rational number that brings it to within 2^-64 of a tie of 54 bits, above or below.
+func TestSumFloat64BesideTies(t *testing.T) {
+	cases := 0
+	for r := int64(2); r < 200; r++ {
+		root := rational.Root(r, 1)
+		if _, ok := root.Rat(); ok {
+			continue
+		}
+		v, _ := root.Float(64).Rat(nil)
+		for k := range int64(4) {
+			tie := big.NewRat(1<<53+2*k+1, 1<<40)
+			s := rational.FromRat(tie.Sub(tie, v)).Add(root)
+			want := math.Ldexp(float64(1<<53+2*k), -40)
+			if root.Cmp(rational.FromRat(v)) > 0 {
+				want = math.Ldexp(float64(1<<53+2*k+2), -40)
+			}
+			cases++
+			if got := s.Float64(); got != want {
+				t.Errorf("%v = %v, want %v", s, got, want)
+			}
+			if got := s.Neg().Float64(); got != -want {
+				t.Errorf("%v = %v, want %v", s.Neg(), got, -want)
+			}
+		}
+	}
+	if cases < 700 {
+		t.Errorf("only %d cases", cases)
+	}
+}
+
+// p - q sqrt(2) for solutions of Pell's equation, far below the subnormal numbers, keeps its sign.
+func TestSumFloat64Vanishing(t *testing.T) {
+	var tiny rational.Factored
+	tiny.MulInt(2, -3000)
+	p, q := big.NewInt(1), big.NewInt(1)
+	for range 120 {
+		s := rational.FromRat(new(big.Rat).SetInt(p)).Sub(rational.FromRat(new(big.Rat).SetInt(q)).Mul(rational.Root(2, 1))).Scale(tiny.SqrtTimes(1))
+		if f := s.Float64(); f != 0 || math.Signbit(f) != (s.Sign() < 0) {
+			t.Errorf("%v = %v", s, f)
+		}
+		p, q = new(big.Int).Add(p, new(big.Int).Lsh(q, 1)), new(big.Int).Add(p, q)
+	}
+}
+
+// Random sums in another order of the terms, whose partial sums may vanish, leave words and come back.
+func TestSumOfOrder(t *testing.T) {
+	r := rand.New(rand.NewPCG(22, 22))
+	for range 2000 {
+		terms := make([]rational.Surd, 1+r.IntN(8))
+		var one rational.Sum
+		for i := range terms {
+			terms[i] = rational.Ratio(r.Int64()>>r.IntN(63), 1+r.Int64()>>r.IntN(62)).Mul(rational.Root(1+r.Int64N(4), 1))
+			one = one.Add(terms[i].Sum())
+		}
+		terms = append(terms, terms[0].Neg())
+		one = one.Sub(terms[0].Sum())
+		r.Shuffle(len(terms), func(i, j int) { terms[i], terms[j] = terms[j], terms[i] })
+		if got := rational.SumOf(terms...); !got.Equal(one) {
+			t.Fatalf("%v, term by term %v", got, one)
+		}
+	}
+}
+
 // A tie of 54 bits, and a sum beside it by p - q sqrt(2), which is as small as 1/(2p) for the solutions of
 // Pell's equation: the first intervals hold the tie.
 func TestSumFloat64NearTies(t *testing.T) {
@@ -246,6 +309,7 @@ func TestMatrix(t *testing.T) {
 	mustPanic(t, "rational.Matrix.Float64s: entry 0, 1 = -2/3 + 1/2*sqrt(2)*i; allowed: a real number", func() { a.Float64s(nil) })
 	mustPanic(t, "rational.Matrix.Mul: n = 2 x 3 matrix; allowed: a shape that fits a 2 x 3 matrix", func() { a.Mul(b) })
 	mustPanic(t, "rational.Matrix.Add: n = 3 x 4 matrix; allowed: a shape that fits a 2 x 3 matrix", func() { a.Add(c) })
+	mustPanic(t, "rational.Matrix.Sub: n = 2 x 4 matrix; allowed: a shape that fits a 2 x 3 matrix", func() { a.Sub(rational.NewMatrix(2, 4, entry(0))) })
 	mustPanic(t, "rational.Matrix.Sub: n = 3 x 4 matrix; allowed: a shape that fits a 2 x 3 matrix", func() { a.Sub(c) })
 	mustPanic(t, "rational.Matrix.At: i, j = 2, 0; allowed: i from 0 to 1, j from 0 to 2", func() { a.At(2, 0) })
 	mustPanic(t, "rational.Matrix.At: i, j = 0, 3; allowed: i from 0 to 1, j from 0 to 2", func() { a.At(0, 3) })

@@ -91,7 +91,7 @@ func FromRat(r *big.Rat) Surd {
 // Root returns sqrt(num/den). It panics with *ArgumentError for negative num and for den < 1.
 //
 // The canonical form takes the squares out of num and den; for operands of more than 50 bits this
-// can take a millisecond.
+// can take a millisecond, and the first time some ten for a list of primes.
 func Root(num, den int64) Surd {
 	if num < 0 || den < 1 {
 		panic(&ArgumentError{"rational.Root", "num/den", fmt.Sprintf("%d/%d", num, den), "num >= 0 and den >= 1"})
@@ -105,8 +105,9 @@ func Root(num, den int64) Surd {
 	return Surd{num: int64(outer), den: outerDen, rad: inner}.Quo(Surd{num: 1, den: 1, rad: innerDen})
 }
 
-// NewSurd returns coeff*sqrt(radicand). The error tells of a negative radicand, or of one that the
-// canonical form cannot factor within the limits stated at [ParseSurd].
+// NewSurd returns coeff*sqrt(radicand), for numbers that come from data: unlike [Root] it returns an error
+// for a negative radicand, a *ArgumentError, and for one that the canonical form cannot factor within the
+// limits stated at [ParseSurd].
 func NewSurd(coeff, radicand *big.Rat) (Surd, error) {
 	if radicand.Sign() < 0 {
 		return Surd{}, &ArgumentError{"rational.NewSurd", "radicand", radicand.String(), "radicand >= 0"}

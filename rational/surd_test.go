@@ -92,6 +92,10 @@ func TestSurdArithmetic(t *testing.T) {
 			}
 		}
 	}
+	third, fifth := rational.Ratio(1<<62, 3).Mul(rational.Ratio(1<<62, 1)), rational.Ratio(1<<62, 5).Mul(rational.Ratio(1<<62, 1))
+	if third.Equal(fifth) || third.Equal(third.Mul(rational.Root(2, 1))) || third.Equal(third.Neg()) {
+		t.Error("Equal leaves out a part of long values")
+	}
 	mustPanic(t, "rational.Surd.Quo: t = 0; allowed: anything but zero", func() { list[1].Quo(rational.Surd{}) })
 	mustPanic(t, "rational.Surd.Inv: s = 0; allowed: anything but zero", func() { rational.Surd{}.Inv() })
 	mustPanic(t, "rational.Ratio: den = 0; allowed: any other integer", func() { rational.Ratio(1, 0) })

@@ -18,8 +18,10 @@ func TestSurdText(t *testing.T) {
 		{"sqrt(14)", "sqrt(14)", `\sqrt{14}`}, {"-sqrt(8)", "-2*sqrt(2)", `-2\sqrt{2}`}, {"sqrt(49/4)", "7/2", `\frac{7}{2}`},
 		{" + 3 * sqrt( 5 / 2 ) / 2 ", "3/4*sqrt(10)", `\frac{3}{4}\sqrt{10}`}, {"1/sqrt(2)", "1/2*sqrt(2)", `\frac{1}{2}\sqrt{2}`},
 		{"sqrt(2)*sqrt(2)", "2", "2"}, {"6/4", "3/2", `\frac{3}{2}`}, {"   1   +   2  ", "3", "3"}, {"1/2+1/3*sqrt(4)", "7/6", `\frac{7}{6}`}, {"i*i", "-1", "-1"}, {"sqrt(0.5)", "1/2*sqrt(2)", `\frac{1}{2}\sqrt{2}`},
-		{"sqrt(18446744073709551557)", "sqrt(18446744073709551557)", `\sqrt{18446744073709551557}`}, // the largest prime of 64 bits
-		{"sqrt(18446744030759878681)", "4294967291", "4294967291"},                                  // the largest square of a prime of 64 bits
+		{"sqrt(18446744073709551556)", "2*sqrt(4611686018427387889)", `2\sqrt{4611686018427387889}`},
+		{"sqrt(19797974722548328581036887527)", "65521*sqrt(4611686018427387847)", `65521\sqrt{4611686018427387847}`}, // beyond a word, with the square of the last prime of the trial
+		{"sqrt(18446744073709551557)", "sqrt(18446744073709551557)", `\sqrt{18446744073709551557}`},                   // the largest prime of 64 bits
+		{"sqrt(18446744030759878681)", "4294967291", "4294967291"},                                                    // the largest square of a prime of 64 bits
 	} {
 		s, err := rational.ParseSurd(c.in)
 		if err != nil || s.String() != c.out || s.LaTeX() != c.latex {

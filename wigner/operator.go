@@ -31,12 +31,15 @@ func (o Operator) String() string {
 
 // Element returns the exact matrix element <j mp| o |j m>. It is zero for |m| > j or |mp| > j. It
 // panics with *rational.ArgumentError for a negative j and for a projection that does not differ
-// from j by an integer.
+// from j by an integer, and for an o that is none of the operators above.
 //
 //	<j m±1| J± |j m> = sqrt((j∓m)(j±m+1))    Edmonds (2.3.17), Varshalovich sec. 2.3
 func (o Operator) Element(j, mp, m rational.Half) rational.Complex {
 	mustState("wigner.Operator.Element", "mp", j, mp)
 	mustState("wigner.Operator.Element", "m", j, m)
+	if o > JSquared {
+		panic(&rational.ArgumentError{Func: "wigner.Operator.Element", Arg: "o", Value: o.String(), Allowed: "Jx to JSquared"})
+	}
 	if m.Abs().Cmp(j) > 0 || mp.Abs().Cmp(j) > 0 {
 		return rational.Complex{}
 	}
@@ -63,7 +66,8 @@ func ladder(j, m rational.Half, step int) rational.Surd {
 }
 
 // Matrix returns the exact (2j+1) x (2j+1) matrix of o, rows and columns in the order of
-// [Projections]: entry (0, 0) belongs to m = -j. Its Complex128s and Float64s methods give it in
+// [Projections]: entry (0, 0) belongs to m = -j. For j = 1/2 that is the reverse of the order in which
+// Pauli's matrices are printed. Its Complex128s and Float64s methods give it in
 // floating point. It panics with *rational.ArgumentError for a negative j.
 func (o Operator) Matrix(j rational.Half) rational.Matrix {
 	mustMomentum("wigner.Operator.Matrix", "j", j)

@@ -60,8 +60,9 @@ func TestOperatorElementOutside(t *testing.T) {
 	if e := wigner.JPlus.Element(h(2), h(4), h(2)); !e.IsZero() {
 		t.Errorf("<1 2|J+|1 1> = %v", e)
 	}
-	if e := wigner.Operator(77).Element(h(2), h(2), h(2)); !e.IsZero() || wigner.Operator(77).String() != "Operator(77)" {
-		t.Errorf("unknown operator: %v", e)
+	want := "wigner.Operator.Element: o = Operator(77); allowed: Jx to JSquared"
+	if e := recovered(func() { wigner.Operator(77).Element(h(2), h(2), h(2)) }); e == nil || e.Error() != want {
+		t.Errorf("panic %v, want %s", e, want)
 	}
 }
 
