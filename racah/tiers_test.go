@@ -51,6 +51,42 @@ func TestForcedTiers(t *testing.T) {
 	}
 }
 
+// Each of the four triads may stand in front, and the columns in any order: the classical symmetries on the
+// sum itself, which set would hide by its choice.
+func TestEveryTriadInFront(t *testing.T) {
+	cases := 0
+	const top = 6
+	var q [6]int
+	var visit func(place int)
+	visit = func(place int) {
+		if place < 6 {
+			for q[place] = 0; q[place] <= top; q[place]++ {
+				visit(place + 1)
+			}
+			return
+		}
+		var chosen tetrad
+		h := rational.Halves
+		if !chosen.set(h(q[0]), h(q[1]), h(q[2]), h(q[3]), h(q[4]), h(q[5])) {
+			return
+		}
+		want := chosen.exact()
+		for _, p := range sixJOrders {
+			k := tetrad{q[p[0]], q[p[1]], q[p[2]], q[p[3]], q[p[4]], q[p[5]]}
+			for _, k := range []tetrad{k, {k.b, k.c, k.a, k.e, k.f, k.d}, {k.b, k.a, k.c, k.e, k.d, k.f}} {
+				if got := k.exact(); !got.Equal(want) {
+					t.Fatalf("%v (halves): %v, as %+v: %v", q, want, k, got)
+				}
+				cases++
+			}
+		}
+	}
+	visit(0)
+	if cases < 30000 {
+		t.Errorf("only %d cases", cases)
+	}
+}
+
 // The fronts are as accurate as they claim before they are rounded, and not much more: a smaller bound
 // makes this test fail.
 func TestFrontErrors(t *testing.T) {

@@ -131,6 +131,22 @@ func (m Matrix) Float64s(dst []float64) []float64 {
 	return dst
 }
 
+// LaTeX returns m for math mode, as a pmatrix environment of amsmath.
+func (m Matrix) LaTeX() string {
+	var b strings.Builder
+	b.WriteString("\\begin{pmatrix}\n")
+	for i, c := range m.entries {
+		b.WriteString(c.LaTeX())
+		if i%m.cols == m.cols-1 {
+			b.WriteString(" \\\\\n")
+		} else {
+			b.WriteString(" & ")
+		}
+	}
+	b.WriteString("\\end{pmatrix}")
+	return b.String()
+}
+
 // String returns the rows on lines of their own, the entries separated by two or more spaces and
 // aligned in columns.
 func (m Matrix) String() string {

@@ -306,6 +306,12 @@ func TestMatrix(t *testing.T) {
 	if f := rational.Identity(2).Float64s(dst); len(f) != 4 || &f[0] != &dst[0] || f[0] != 1 || f[1] != 0 || f[3] != 1 {
 		t.Errorf("Float64s gives %v", f)
 	}
+	want2 := "\\begin{pmatrix}\n1 & \\mathrm{i} \\\\\n0 & -\\frac{1}{2}\\sqrt{3} \\\\\n\\end{pmatrix}"
+	if got := rational.NewMatrix(2, 2, func(i, j int) rational.Complex {
+		return [...]rational.Complex{rational.Ratio(1, 1).Complex(), rational.I(), {}, rational.Root(3, 4).Neg().Complex()}[2*i+j]
+	}).LaTeX(); got != want2 {
+		t.Errorf("LaTeX %q, want %q", got, want2)
+	}
 	mustPanic(t, "rational.Matrix.Float64s: entry 0, 1 = -2/3 + 1/2*sqrt(2)*i; allowed: a real number", func() { a.Float64s(nil) })
 	mustPanic(t, "rational.Matrix.Mul: n = 2 x 3 matrix; allowed: a shape that fits a 2 x 3 matrix", func() { a.Mul(b) })
 	mustPanic(t, "rational.Matrix.Add: n = 3 x 4 matrix; allowed: a shape that fits a 2 x 3 matrix", func() { a.Add(c) })

@@ -184,23 +184,28 @@ func (r *regge) sign(image *regge, coefficient bool) int {
 	return image.parity()
 }
 
-// shortest returns the even image, cyclic in the rows and perhaps reflected in the diagonal, whose sum
-// needs the fewest bits. These keep the value of the 3j symbol. Where one momentum is small beside the
+// image returns one of the six squares that r becomes by a cyclic permutation of its rows, for i >= 3 after
+// a reflection in the diagonal. These are even: they keep the value of the 3j symbol.
+func (r *regge) image(i int) (q regge) {
+	for row := range 3 {
+		for col := range 3 {
+			from := 3*((row+i)%3) + col
+			if i >= 3 {
+				from = 3*col + (row+i)%3
+			}
+			q[3*row+col] = r[from]
+		}
+	}
+	return q
+}
+
+// shortest returns the image whose sum needs the fewest bits. Where one momentum is small beside the
 // others, or a projection close to the largest, that is a few bits instead of some j1+j2+j3.
 func (r *regge) shortest() regge {
 	best, sum := *r, r.sum()
 	least := sum.Bits()
 	for i := 1; i < 6; i++ {
-		var image regge
-		for row := range 3 {
-			for col := range 3 {
-				from := 3*((row+i)%3) + col
-				if i >= 3 {
-					from = 3*col + (row+i)%3
-				}
-				image[3*row+col] = r[from]
-			}
-		}
+		image := r.image(i)
 		sum = image.sum()
 		if bits := sum.Bits(); bits < least {
 			best, least = image, bits
@@ -211,10 +216,15 @@ func (r *regge) shortest() regge {
 
 // exact returns the value as a 3j symbol or as a Clebsch-Gordan coefficient.
 func (r *regge) exact(coefficient bool) rational.Surd {
-	image := *r
-	if r.total() > 66 {
-		image = r.shortest()
+	if r.total() <= 66 { // one word holds the sum in any orientation
+		return r.exactBy(r, coefficient)
 	}
+	image := r.shortest()
+	return r.exactBy(&image, coefficient)
+}
+
+// exactBy returns the value by the sum of an image of r.
+func (r *regge) exactBy(image *regge, coefficient bool) rational.Surd {
 	var front rational.Factored // squared
 	for i, n := range image {
 		if i < 3 {
@@ -229,7 +239,7 @@ func (r *regge) exact(coefficient bool) rational.Surd {
 	}
 	sum := image.sum()
 	v := sum.Sqrt(&front)
-	if r.sign(&image, coefficient) != 0 {
+	if r.sign(image, coefficient) != 0 {
 		return v.Neg()
 	}
 	return v

@@ -44,6 +44,26 @@ func TestForcedTiers(t *testing.T) {
 	})
 }
 
+// Every orientation of the square gives the same value: Regge's even symmetries on the sum itself.
+func TestEveryOrientation(t *testing.T) {
+	cases := 0
+	squares(10, func(r *regge) {
+		for _, coefficient := range []bool{false, true} {
+			want := r.exactBy(r, coefficient)
+			for i := range 6 {
+				image := r.image(i)
+				if got := r.exactBy(&image, coefficient); !got.Equal(want) {
+					t.Fatalf("square %v: %v, image %v: %v", *r, want, image, got)
+				}
+				cases++
+			}
+		}
+	})
+	if cases < 100000 {
+		t.Errorf("only %d cases", cases)
+	}
+}
+
 // The fronts are as accurate as they claim before they are rounded, and not much more: a smaller bound
 // makes this test fail.
 func TestFrontErrors(t *testing.T) {
