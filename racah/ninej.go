@@ -29,7 +29,8 @@ func NineJ(a, b, c, d, e, f, g, h, i rational.Half) rational.Surd {
 	} else if v.Zero() {
 		return rational.Surd{}
 	}
-	return q.exact()
+	_, t := q.twice()
+	return nineJExact(&t)
 }
 
 // CheckNineJ tells why the 9j symbol of [NineJ] vanishes, or that it does not: the first row or column
@@ -45,10 +46,11 @@ func CheckNineJ(a, b, c, d, e, f, g, h, i rational.Half) (wigner.Verdict, error)
 	if v.Zero() {
 		return v, nil
 	}
-	if twice, array := q.twice(); twice/2&1 == 1 && array.LinesEqual() {
+	total, t := q.twice()
+	if total/2&1 == 1 && t.LinesEqual() {
 		return wigner.Verdict{Rule: wigner.Symmetry}, nil
 	}
-	if q.exact().IsZero() {
+	if nineJExact(&t).IsZero() {
 		return wigner.Verdict{Rule: wigner.Accidental}, nil
 	}
 	return wigner.Verdict{}, nil
@@ -79,17 +81,16 @@ func (q *nineJ) twice() (total int, a square.Array) {
 	return total, a
 }
 
-// exact returns the value of an allowed symbol.
-func (q *nineJ) exact() rational.Surd {
-	_, t := q.twice()
+// nineJExact returns the value of an allowed symbol, from twice its arguments.
+func nineJExact(t *square.Array) rational.Surd {
 	var f rational.Factored
 	for _, p := range &nineJTriads {
 		mulTriangle(&f, t[p[0]], t[p[1]], t[p[2]], 1)
 	}
-	if z, ok := nineJWord(&t); ok {
+	if z, ok := nineJWord(t); ok {
 		return f.SqrtTimes(z)
 	}
-	return f.SqrtTimesBig(nineJSum(new(big.Int), &t))
+	return f.SqrtTimesBig(nineJSum(new(big.Int), t))
 }
 
 // nineJRange returns twice the first and the last x of the sum.

@@ -103,10 +103,14 @@ func (k *tetrad) manyWords(sum *binsum.Quadruple, negative bool) (f float64, ok 
 func (k *tetrad) smallFront(s *binsum.Quadruple) dd.Pair {
 	d := dd.SqrtBinomials()
 	front := d.RootNext[dd.Place(s.T, s.N1)].Mul(d.Root[dd.Place(k.c, s.N2)])
-	aef := d.InverseNext[dd.Place(s.S2, s.S2-k.a)].Mul(d.Inverse[dd.Place(k.a, s.S2-k.e)])
-	dbf := d.InverseNext[dd.Place(s.S3, s.S3-k.d)].Mul(d.Inverse[dd.Place(k.d, s.S3-k.b)])
-	dec := d.InverseNext[dd.Place(s.S1, s.S1-k.d)].Mul(d.Inverse[dd.Place(k.d, s.S1-k.e)])
+	aef, dbf, dec := delta(d, s.S2, k.a, k.e), delta(d, s.S3, k.d, k.b), delta(d, s.S1, k.d, k.e)
 	return front.Mul(aef).Mul(dbf.Mul(dec))
+}
+
+// delta returns the triangle coefficient of three momenta that add up to j, the first two of them given as
+// twice their values, with an error of 45 u^2.
+func delta(d *dd.Binomials, j, x, y int) dd.Pair {
+	return d.InverseNext[dd.Place(j, j-x)].Mul(d.Inverse[dd.Place(x, j-y)])
 }
 
 // largeFront returns the same front from factorials: sixteen factors with an error of u^2, and sixteen

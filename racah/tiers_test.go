@@ -8,7 +8,9 @@ import (
 
 	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/dd"
+	"example.org/couplet/internal/square"
 	"example.org/couplet/rational"
+	"example.org/couplet/wigner"
 )
 
 // drawTetrad returns a random allowed symbol with 2j to size.
@@ -116,6 +118,62 @@ func TestFrontErrors(t *testing.T) {
 	if worstSmall < smallError/64 || worstLarge < largeError/64 {
 		t.Error("the bound is far too wide")
 	}
+}
+
+// The routes of the 9j symbol give the bits of the exact one, and their fronts are as accurate as they
+// claim, and not much more.
+func TestNineJTiers(t *testing.T) {
+	r := rand.New(rand.NewPCG(24, 24))
+	worstSmall, worstLarge := 0.0, 0.0
+	cases := 0
+	for range 3000000 {
+		var q square.Array
+		size := []int{4, 8, 16}[r.IntN(3)]
+		for i := range q {
+			q[i] = r.IntN(size + 1)
+		}
+		if !nineJAllowed(&q) {
+			continue
+		}
+		cases++
+		var f rational.Factored
+		for _, p := range &nineJTriads {
+			mulTriangle(&f, q[p[0]], q[p[1]], q[p[2]], 1)
+		}
+		want := f.SqrtTimes(1).Float(300)
+		small, ok := nineJSmallFront(&q)
+		if !ok {
+			t.Fatalf("%v has no small front", q)
+		}
+		worstSmall = max(worstSmall, relative(small, 0, want))
+		large := nineJLargeFront(&q)
+		worstLarge = max(worstLarge, relative(large.Pair, large.Exp, want))
+		if size > 8 {
+			continue
+		}
+		value := nineJExact(&q).Float64()
+		few, ok := nineJFewWords(&q)
+		many, okMany := nineJManyWords(&q)
+		if !ok || !okMany || math.Float64bits(few) != math.Float64bits(value) || math.Float64bits(many) != math.Float64bits(value) {
+			t.Fatalf("%v: %g, %v by few words, %g, %v by many, exact %g", q, few, ok, many, okMany, value)
+		}
+	}
+	t.Logf("%d symbols; largest errors: %.1f of %.0f u^2 and %.1f of %.0f u^2", cases, worstSmall*0x1p106, nineJSmallError*0x1p106, worstLarge*0x1p106, largeError*0x1p106)
+	if cases < 2000 || worstSmall > nineJSmallError || worstLarge > largeError {
+		t.Error("the error exceeds the bound, or the draw misses")
+	}
+	if worstSmall < nineJSmallError/64 || worstLarge < largeError/64 {
+		t.Error("the bound is far too wide")
+	}
+}
+
+func nineJAllowed(q *square.Array) bool {
+	for _, p := range &nineJTriads {
+		if wigner.Triad(rational.Halves(q[p[0]]), rational.Halves(q[p[1]]), rational.Halves(q[p[2]])) != wigner.NonZero {
+			return false
+		}
+	}
+	return true
 }
 
 func relative(p dd.Pair, exp int, want *big.Float) float64 {

@@ -35,7 +35,10 @@ var (
 	nineJ = symbol{"9j", 9, [][3]int{{0, 1, 2}, {3, 4, 5}, {6, 7, 8}, {0, 3, 6}, {1, 4, 7}, {2, 5, 8}},
 		func(q []rational.Half) rational.Surd {
 			return racah.NineJ(q[0], q[1], q[2], q[3], q[4], q[5], q[6], q[7], q[8])
-		}, nil}
+		},
+		func(q []rational.Half) float64 {
+			return racah.NineJFloat(q[0], q[1], q[2], q[3], q[4], q[5], q[6], q[7], q[8])
+		}}
 )
 
 // The lines of the tables.
@@ -50,6 +53,8 @@ var (
 		{threeJ, 100, 64, true}, {threeJ, 1000, 64, true}, {threeJ, 20000, 16, true},
 		{sixJ, 1, 4096, false}, {sixJ, 8, 4096, false}, {sixJ, 16, 4096, false}, {sixJ, 30, 4096, false}, {sixJ, 50, 4096, false},
 		{sixJ, 100, 64, true}, {sixJ, 1000, 64, true},
+		{nineJ, 1, 4096, false}, {nineJ, 8, 4096, false}, {nineJ, 16, 4096, false}, {nineJ, 30, 64, false},
+		{nineJ, 50, 16, true}, {nineJ, 100, 8, true},
 	}
 )
 

@@ -62,22 +62,28 @@ func (s *Sum) Int(z *big.Int) *big.Int {
 func (s *Sum) Leading() (high, low uint64, exp int, negative bool) {
 	var stack buffer
 	total, negative := s.words(&stack)
-	if len(total) == 0 {
-		return 0, 0, 0, false
+	high, low, exp = Leading(total)
+	return high, low, exp, negative
+}
+
+// Leading returns the 128 leading bits of a number given by its words, without leading zeros, as
+// [Sum.Leading] does.
+func Leading(x []big.Word) (high, low uint64, exp int) {
+	if len(x) == 0 {
+		return 0, 0, 0
 	}
-	// The next 64 bits below position p of the words, zeros below the end.
-	shift := bits.LeadingZeros(uint(total[len(total)-1]))
-	position := len(total)*bits.UintSize - shift
+	// The next 64 bits below the position, zeros below the end.
+	position := len(x)*bits.UintSize - bits.LeadingZeros(uint(x[len(x)-1]))
 	take := func() (v uint64) {
 		for range 64 / bits.UintSize {
 			position -= bits.UintSize
-			v = v<<(bits.UintSize-1)<<1 | uint64(window(total, position))
+			v = v<<(bits.UintSize-1)<<1 | uint64(window(x, position))
 		}
 		return v
 	}
 	high = take()
 	low = take()
-	return high, low, position, negative
+	return high, low, position
 }
 
 // window returns the word of bits from position up, zeros below position 0.

@@ -47,9 +47,9 @@ func (s *Quadruple) Mod128() (high, low uint64) {
 	t := binomials()
 	h, i, j, k := place(first+1, s.T+1), place(s.N1, first-s.S1), place(s.N2, first-s.S2), place(s.N3, first-s.S3)
 	for range last - first + 1 {
-		a, b := mul128(t.high[h], t.low[h], t.high[i], t.low[i])
-		a, b = mul128(a, b, t.high[j], t.low[j])
-		a, b = mul128(a, b, t.high[k], t.low[k])
+		a, b := Mul128(t.high[h], t.low[h], t.high[i], t.low[i])
+		a, b = Mul128(a, b, t.high[j], t.low[j])
+		a, b = Mul128(a, b, t.high[k], t.low[k])
 		high, low = sub128(a, b, high, low)
 		h += tableTops
 		i++
@@ -57,7 +57,7 @@ func (s *Quadruple) Mod128() (high, low uint64) {
 		k++
 	}
 	if last&1 != 0 {
-		high, low = sub128(0, 0, high, low)
+		high, low = Negate128(high, low)
 	}
 	return high, low
 }

@@ -41,15 +41,15 @@ func (s *Triple) Mod128() (high, low uint64) {
 	t := binomials()
 	i, j, k := place(s.N1, first), place(s.N2, s.A-first), place(s.N3, s.B-first)
 	for range last - first + 1 {
-		h, l := mul128(t.high[i], t.low[i], t.high[j], t.low[j])
-		h, l = mul128(h, l, t.high[k], t.low[k])
+		h, l := Mul128(t.high[i], t.low[i], t.high[j], t.low[j])
+		h, l = Mul128(h, l, t.high[k], t.low[k])
 		high, low = sub128(h, l, high, low)
 		i++
 		j--
 		k--
 	}
 	if last&1 != 0 {
-		high, low = sub128(0, 0, high, low)
+		high, low = Negate128(high, low)
 	}
 	return high, low
 }

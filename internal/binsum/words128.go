@@ -2,10 +2,17 @@ package binsum
 
 import "math/bits"
 
-// mul128 returns the product of two numbers of two words modulo 2^128.
-func mul128(ah, al, bh, bl uint64) (high, low uint64) {
+// Mul128 returns the product of two numbers of two words modulo 2^128.
+func Mul128(ah, al, bh, bl uint64) (high, low uint64) {
 	high, low = bits.Mul64(al, bl)
 	return high + ah*bl + al*bh, low
+}
+
+// Add128 returns the sum of two numbers of two words modulo 2^128.
+func Add128(ah, al, bh, bl uint64) (high, low uint64) {
+	low, carry := bits.Add64(al, bl, 0)
+	high, _ = bits.Add64(ah, bh, carry)
+	return high, low
 }
 
 // sub128 returns the difference of two numbers of two words modulo 2^128.
@@ -14,3 +21,6 @@ func sub128(ah, al, bh, bl uint64) (high, low uint64) {
 	high, _ = bits.Sub64(ah, bh, borrow)
 	return high, low
 }
+
+// Negate128 returns the negative of a number of two words modulo 2^128.
+func Negate128(high, low uint64) (h, l uint64) { return sub128(0, 0, high, low) }
