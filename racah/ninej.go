@@ -23,13 +23,11 @@ import (
 // It is zero where a row or a column breaks a selection rule; [CheckNineJ] says which. It panics with
 // *rational.ArgumentError for a negative argument.
 func NineJ(a, b, c, d, e, f, g, h, i rational.Half) rational.Surd {
-	q := nineJ{"racah.NineJ", [9]rational.Half{a, b, c, d, e, f, g, h, i}}
-	if v, err := q.rule(); err != nil {
-		panic(err)
-	} else if v.Zero() {
+	t, ok := nineJArray(a, b, c, d, e, f, g, h, i)
+	if !ok {
+		forbiddenNineJ("racah.NineJ", a, b, c, d, e, f, g, h, i)
 		return rational.Surd{}
 	}
-	_, t := q.twice()
 	return nineJExact(&t)
 }
 
@@ -46,7 +44,11 @@ func CheckNineJ(a, b, c, d, e, f, g, h, i rational.Half) (wigner.Verdict, error)
 	if v.Zero() {
 		return v, nil
 	}
-	total, t := q.twice()
+	t, _ := nineJArray(a, b, c, d, e, f, g, h, i)
+	total := 0
+	for _, twice := range t {
+		total += twice
+	}
 	if total/2&1 == 1 && t.LinesEqual() {
 		return wigner.Verdict{Rule: wigner.Symmetry}, nil
 	}
@@ -56,7 +58,7 @@ func CheckNineJ(a, b, c, d, e, f, g, h, i rational.Half) (wigner.Verdict, error)
 	return wigner.Verdict{}, nil
 }
 
-// nineJ is a 9j symbol on its way from arguments to value.
+// nineJ is a 9j symbol by its arguments, for whoever must tell what is wrong with them.
 type nineJ struct {
 	fn string
 	j  [9]rational.Half
@@ -72,13 +74,57 @@ func (q *nineJ) rule() (wigner.Verdict, *rational.ArgumentError) {
 	return checkTriads(q.fn, nineJNames, q.j[:], nineJTriads[:])
 }
 
-// twice returns twice the arguments and their sum.
-func (q *nineJ) twice() (total int, a square.Array) {
-	for i, j := range q.j {
-		a[i] = j.Twice()
-		total += a[i]
+// forbiddenNineJ panics for a malformed argument.
+func forbiddenNineJ(fn string, a, b, c, d, e, f, g, h, i rational.Half) {
+	q := nineJ{fn, [9]rational.Half{a, b, c, d, e, f, g, h, i}}
+	if _, err := q.rule(); err != nil {
+		panic(err)
 	}
-	return total, a
+}
+
+// nineJArray returns twice the arguments; ok is false for a symbol that a selection rule forbids and for a
+// negative argument.
+func nineJArray(a, b, c, d, e, f, g, h, i rational.Half) (t square.Array, ok bool) {
+	t = square.Array{a.Twice(), b.Twice(), c.Twice(), d.Twice(), e.Twice(), f.Twice(), g.Twice(), h.Twice(), i.Twice()}
+	sign, odd := int64(0), int64(0)
+	for _, p := range &nineJTriads {
+		// 64 bits hold the sums of Halves on every platform.
+		x, y, z := int64(t[p[0]]), int64(t[p[1]]), int64(t[p[2]])
+		sign |= (x + y - z) | (y + z - x) | (z + x - y)
+		odd |= x + y + z
+	}
+	return t, sign >= 0 && odd&1 == 0
+}
+
+// nineJOrders are the permutations of the rows, with whether they are odd.
+var nineJOrders = [6]struct {
+	rows [3]int
+	odd  bool
+}{
+	{[3]int{0, 1, 2}, false}, {[3]int{1, 2, 0}, false}, {[3]int{2, 0, 1}, false},
+	{[3]int{1, 0, 2}, true}, {[3]int{0, 2, 1}, true}, {[3]int{2, 1, 0}, true},
+}
+
+// nineJShortest returns the symbol with its rows in the order in which its sum has the fewest terms, and
+// whether that changes its sign: an odd permutation does, where the sum of all arguments is odd. The search
+// pays for long sums only.
+func nineJShortest(t *square.Array) (best square.Array, negative bool) {
+	fewest := -1
+	total := 0
+	for _, twice := range t {
+		total += twice
+	}
+	for _, order := range &nineJOrders {
+		p, q, r := 3*order.rows[0], 3*order.rows[1], 3*order.rows[2]
+		first := max(distance(t[p], t[r+2]), distance(t[p+1], t[q+2]), distance(t[q], t[r+1]))
+		last := min(t[p]+t[r+2], t[p+1]+t[q+2], t[q]+t[r+1])
+		if terms := last - first; fewest < 0 || terms < fewest {
+			fewest = terms
+			best = square.Array{t[p], t[p+1], t[p+2], t[q], t[q+1], t[q+2], t[r], t[r+1], t[r+2]}
+			negative = order.odd && total&2 != 0
+		}
+	}
+	return best, negative
 }
 
 // nineJExact returns the value of an allowed symbol, from twice its arguments.
@@ -90,7 +136,12 @@ func nineJExact(t *square.Array) rational.Surd {
 	if z, ok := nineJWord(t); ok {
 		return f.SqrtTimes(z)
 	}
-	return f.SqrtTimesBig(nineJSum(new(big.Int), t))
+	image, negative := nineJShortest(t)
+	z := nineJSum(new(big.Int), &image)
+	if negative {
+		z.Neg(z)
+	}
+	return f.SqrtTimesBig(z)
 }
 
 // nineJRange returns twice the first and the last x of the sum.

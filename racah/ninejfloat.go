@@ -14,13 +14,11 @@ import (
 //
 // Time grows like the square of the size times the length of the sum of [NineJ].
 func NineJFloat(a, b, c, d, e, f, g, h, i rational.Half) float64 {
-	q := nineJ{"racah.NineJFloat", [9]rational.Half{a, b, c, d, e, f, g, h, i}}
-	if v, err := q.rule(); err != nil {
-		panic(err)
-	} else if v.Zero() {
+	t, ok := nineJArray(a, b, c, d, e, f, g, h, i)
+	if !ok {
+		forbiddenNineJ("racah.NineJFloat", a, b, c, d, e, f, g, h, i)
 		return 0
 	}
-	_, t := q.twice()
 	return nineJFloat(&t)
 }
 
@@ -46,14 +44,22 @@ func nineJFloat(t *square.Array) float64 {
 // symbol exceeds 1, by DLMF (34.7.2), so that the sum is at most 1/front.
 func nineJFewWords(t *square.Array) (f float64, ok bool) {
 	front, ok := nineJSmallFront(t)
-	if !ok || front.Hi < 0x1p-126 {
+	var s dd.Pair
+	switch {
+	case !ok || front.Hi < 0x1p-126:
 		return 0, false
+	case front.Hi > 0x1p-62:
+		var sum uint64
+		sum, ok = nineJMod64(t)
+		s = dd.FromInt64(int64(sum))
+	default:
+		var high, low uint64
+		high, low, ok = nineJMod128(t)
+		s = dd.FromMod128(high, low)
 	}
-	high, low, ok := nineJMod128(t)
 	if !ok {
 		return 0, false
 	}
-	s := dd.FromMod128(high, low)
 	if s.Hi == 0 {
 		return 0, true
 	}
@@ -77,6 +83,27 @@ func nineJSmallFront(t *square.Array) (front dd.Pair, ok bool) {
 		deltas[i] = delta(d, j, t[p[0]], t[p[1]])
 	}
 	return deltas[0].Mul(deltas[1]).Mul(deltas[2].Mul(deltas[3])).Mul(deltas[4].Mul(deltas[5])), true
+}
+
+// nineJMod64 returns the sum of nineJSum modulo 2^64, where the tables of binomials reach far enough.
+func nineJMod64(t *square.Array) (sum uint64, ok bool) {
+	first, last := nineJRange(t)
+	var s binsum.Quadruple
+	for x := first; x <= last; x += 2 {
+		term := uint64(x + 1)
+		for _, k := range nineJFactors(t, x) {
+			k.sum(&s)
+			if !s.Fits() {
+				return 0, false
+			}
+			term *= s.Mod64()
+		}
+		sum += term
+	}
+	if first&1 != 0 {
+		sum = -sum
+	}
+	return sum, true
 }
 
 // nineJMod128 returns the sum of nineJSum modulo 2^128, where the tables of binomials reach far enough.
@@ -107,12 +134,13 @@ func nineJMod128(t *square.Array) (high, low uint64, ok bool) {
 
 // nineJManyWords is the route for sums of any length.
 func nineJManyWords(t *square.Array) (f float64, ok bool) {
-	z := nineJSum(new(big.Int), t)
+	image, negative := nineJShortest(t)
+	z := nineJSum(new(big.Int), &image)
 	if z.Sign() == 0 {
 		return 0, true
 	}
 	high, low, exp := binsum.Leading(z.Bits())
-	s := dd.Scaled{Pair: dd.FromWords(high, low).Normal().Scale(0, z.Sign() < 0), Exp: exp}
+	s := dd.Scaled{Pair: dd.FromWords(high, low).Normal().Scale(0, negative != (z.Sign() < 0)), Exp: exp}
 	return nineJLargeFront(t).Mul(s).Round(largeError)
 }
 

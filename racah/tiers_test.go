@@ -151,7 +151,21 @@ func TestNineJTiers(t *testing.T) {
 		if size > 8 {
 			continue
 		}
-		value := nineJExact(&q).Float64()
+		exact := nineJExact(&q)
+		for _, order := range &nineJOrders { // every order of the rows, the shortest among them
+			image := square.Array{}
+			for i, row := range order.rows {
+				copy(image[3*i:], q[3*row:3*row+3])
+			}
+			v := f.SqrtTimesBig(nineJSum(new(big.Int), &image))
+			if total := q[0] + q[1] + q[2] + q[3] + q[4] + q[5] + q[6] + q[7] + q[8]; order.odd && total&2 != 0 {
+				v = v.Neg()
+			}
+			if !v.Equal(exact) {
+				t.Fatalf("%v: %v, with rows in the order %v %v", q, exact, order.rows, v)
+			}
+		}
+		value := exact.Float64()
 		few, ok := nineJFewWords(&q)
 		many, okMany := nineJManyWords(&q)
 		if !ok || !okMany || math.Float64bits(few) != math.Float64bits(value) || math.Float64bits(many) != math.Float64bits(value) {

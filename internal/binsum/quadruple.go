@@ -118,5 +118,12 @@ func (s *Quadruple) bits() int {
 		BinomialBits(s.N3+s.N1, s.N1+s.S1-s.S3)+largestBits(s.N2, first-s.S2, last-s.S2))
 }
 
-// inWord reports whether a signed word is sure to hold S.
-func (s *Quadruple) inWord() bool { return s.Fits() && s.bits() <= 63 }
+// inWord reports whether a signed word is sure to hold S. The plain bound, which decides nearly always,
+// comes first.
+func (s *Quadruple) inWord() bool {
+	_, last := s.limits()
+	if last+1 >= tableTops {
+		return false
+	}
+	return BinomialBits(last+1, s.T+1)+BinomialBits(s.T, s.T/2) <= 63 || s.bits() <= 63
+}
