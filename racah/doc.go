@@ -15,6 +15,6 @@
 //
 // # Accuracy
 //
-// The functions whose names end in Float return the nearest float64, to even on a tie; all others are
-// exact. Both hold for arguments of any size that memory allows.
+// The functions whose names end in Float return the nearest float64, to even on a tie, rows are within the
+// bound that they state, and all others are exact. Symbols may have arguments of any size that memory allows.
 package racah

@@ -35,8 +35,8 @@ func (o Operator) String() string {
 //
 //	<j m±1| J± |j m> = sqrt((j∓m)(j±m+1))    Edmonds (2.3.17), Varshalovich sec. 2.3
 func (o Operator) Element(j, mp, m rational.Half) rational.Complex {
-	mustState("wigner.Operator.Element", "mp", j, mp)
-	mustState("wigner.Operator.Element", "m", j, m)
+	mustState("wigner.Operator.Element", "j", "mp", j, mp)
+	mustState("wigner.Operator.Element", "j", "m", j, m)
 	if o > JSquared {
 		panic(&rational.ArgumentError{Func: "wigner.Operator.Element", Arg: "o", Value: o.String(), Allowed: "Jx to JSquared"})
 	}
@@ -78,9 +78,9 @@ func (o Operator) Matrix(j rational.Half) rational.Matrix {
 }
 
 // mustState panics unless j >= 0 and j-m is an integer.
-func mustState(fn, mName string, j, m rational.Half) {
-	mustMomentum(fn, "j", j)
-	if err := argument.Projection(fn, "j", mName, j, m); err != nil {
+func mustState(fn, jName, mName string, j, m rational.Half) {
+	mustMomentum(fn, jName, j)
+	if err := argument.Projection(fn, jName, mName, j, m); err != nil {
 		panic(err)
 	}
 }

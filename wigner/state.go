@@ -18,7 +18,7 @@ type State struct {
 
 // Basis returns the state |j m>. It panics with *rational.ArgumentError unless m is one of -j ... j.
 func Basis(j, m rational.Half) State {
-	mustState("wigner.Basis", "m", j, m)
+	mustState("wigner.Basis", "j", "m", j, m)
 	if m.Abs().Cmp(j) > 0 {
 		panic(&rational.ArgumentError{Func: "wigner.Basis", Arg: "m", Value: m.String(), Allowed: fmt.Sprintf("from %v to %v", j.Neg(), j)})
 	}
@@ -37,7 +37,7 @@ func (s State) J() rational.Half { return s.j }
 // Amplitude returns <j m|s>; it is zero for |m| > j. It panics with *rational.ArgumentError where
 // j-m is not an integer.
 func (s State) Amplitude(m rational.Half) rational.Complex {
-	mustState("wigner.State.Amplitude", "m", s.j, m)
+	mustState("wigner.State.Amplitude", "j", "m", s.j, m)
 	if s.amplitudes == nil || m.Abs().Cmp(s.j) > 0 {
 		return rational.Complex{}
 	}

@@ -20,7 +20,7 @@ func TestNoAccidentalFusing(t *testing.T) {
 		t.Skip("compiles for another processor")
 	}
 	root := published.Root(t)
-	build := exec.Command("go", "build", "-gcflags=-S", "./rational", "./internal/dd", "./internal/binsum", "./wigner", "./racah")
+	build := exec.Command("go", "build", "-gcflags=-S", "./rational", "./internal/dd", "./internal/row", "./internal/binsum", "./wigner", "./racah")
 	build.Dir = root
 	build.Env = append(os.Environ(), "GOARCH=arm64", "GOOS=linux", "CGO_ENABLED=0")
 	out, err := build.CombinedOutput()

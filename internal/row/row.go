@@ -1,0 +1,189 @@
+// Package row computes whole rows of coupling coefficients from the three-term recurrences that they obey,
+// from both ends towards the middle (Schulten and Gordon 1975), in double-double arithmetic.
+package row
+
+import (
+	"math"
+
+	"example.org/couplet/internal/dd"
+)
+
+// Recurrence is that of the 3j symbols and of the 6j symbols x(j) in one momentum j,
+//
+//	J l(J+2) x(j+1) + d(J) x(j) + (J+2) l(J) x(j-1) = 0,    J = 2j
+//	l(J) = sqrt[ Π |J^2 - D^2| ]
+//	d(J) = -2 (J+1) [ C0 + C1 J(J+2) + C2 J^2(J+2)^2 ]
+//
+// with the product over the first N of the D. Every D is an integer below 2^25, so that all that is written
+// with J and D is exact in a float64; the C are integers, in normal form. Where J can be 0, C0 is 0: the
+// whole recurrence has a factor J there, which is taken out.
+type Recurrence struct {
+	First int // J of the first member
+	D     [4]float64
+	N     int
+	C     [3]dd.Pair
+}
+
+// links returns l(J) and 1/(w l(J)), of which one division is enough for both.
+func (r *Recurrence) links(J, w float64) (link, inverse dd.Pair) {
+	p := dd.Pair{Hi: math.Abs(float64((J - r.D[0]) * (J + r.D[0])))}
+	for _, d := range r.D[1:r.N] {
+		p = times(p, math.Abs(float64((J-d)*(J+d))))
+	}
+	q := math.Sqrt(p.Hi)
+	v := 1 / (w * q)
+	rest := math.FMA(-q, q, p.Hi) + p.Lo
+	link = dd.Pair{Hi: q, Lo: float64(rest * (0.5 * (v * w)))}
+	t := times(link, w)
+	e := math.FMA(-t.Lo, v, math.FMA(-t.Hi, v, 1))
+	return link, dd.Pair{Hi: v, Lo: float64(v * e)}
+}
+
+// diagonal returns d(J), for J = 0 without its factor J.
+func (r *Recurrence) diagonal(J float64) dd.Pair {
+	jj := float64(J * (J + 2))
+	v := r.C[1]
+	if r.C[2].Hi != 0 {
+		v = add(v, times(r.C[2], jj))
+	}
+	if J == 0 {
+		return times(v, -4) // (J+2) v, and J+1 = 1
+	}
+	return times(add(times(v, jj), r.C[0]), -2*(J+1))
+}
+
+// Solve fills x with the members that belong to First, First+2 and so on, such that the sum of
+// w (2j+1) x(j)^2 is 1 and the last has the given sign. It allocates nothing.
+//
+// A recurrence is stable while its solution grows or oscillates, and not while it decays. So either end is
+// followed until its members stop growing, and then both by turns to where they meet. What double-double
+// leaves of the errors is far below an ulp; what is left is the rounding of the members and of their scale.
+func (r *Recurrence) Solve(x []float64, w float64, negative bool) {
+	n := len(x)
+	if n == 1 {
+		x[0] = inverse(root(dd.Pair{Hi: w * float64(r.First+1)})).Hi
+		if negative {
+			x[0] = -x[0]
+		}
+		return
+	}
+	up, down := r.start(0, 1, n), r.start(n-1, -1, n)
+	x[0], x[n-1] = 1, 1
+	for up.at+1 < down.at {
+		// Whichever still grows alone, otherwise whichever is behind.
+		if up.grows && !down.grows || up.grows == down.grows && up.at <= n-1-down.at {
+			r.advance(&up, x)
+		} else {
+			r.advance(&down, x)
+		}
+	}
+	// The ends are neighbors now. One step more gives both of them two members in common, and the ratio of
+	// the two solutions by least squares, so that a zero among them does no harm.
+	upNext, _ := r.next(&up)
+	downNext, _ := r.next(&down)
+	product := add(up.here.Mul(downNext).Normal(), upNext.Mul(down.here).Normal())
+	square := add(downNext.Mul(downNext).Normal(), down.here.Mul(down.here).Normal())
+	ratio := product.Mul(inverse(square)).Normal() // up/down
+	total := add(up.norm, down.norm.Mul(ratio.Mul(ratio).Normal()).Normal())
+	upScale := inverse(root(times(total, w)))
+	downScale := upScale.Mul(ratio).Normal()
+	if (downScale.Hi < 0) != negative {
+		upScale, downScale = upScale.Scale(0, true), downScale.Scale(0, true)
+	}
+	rescale(x[:up.at+1], upScale)
+	rescale(x[up.at+1:], downScale)
+}
+
+func rescale(x []float64, scale dd.Pair) {
+	for i, v := range x {
+		x[i] = math.FMA(v, scale.Hi, float64(v*scale.Lo))
+	}
+}
+
+// end is one end of the solution: where it has come to, with the last two members.
+type end struct {
+	at, step     int
+	here, before dd.Pair
+	link         dd.Pair // between the two
+	norm         dd.Pair // sum of (2j+1) x^2 so far
+	grows        bool
+}
+
+func (r *Recurrence) start(at, step, n int) end {
+	one := dd.Pair{Hi: 1}
+	return end{at: at, step: step, here: one, norm: dd.Pair{Hi: r.twice(at) + 1}, grows: true}
+}
+
+// twice returns J of the i-th member.
+func (r *Recurrence) twice(i int) float64 { return float64(r.First + 2*i) }
+
+// next returns the member after the last, and the link to it.
+func (r *Recurrence) next(e *end) (v, link dd.Pair) {
+	J := r.twice(e.at)
+	ahead, ahead2, behind := J+2, J, J+2 // where the link is, and the factors of both links
+	if e.step < 0 {
+		ahead, ahead2, behind = J, J+2, J
+	}
+	if J == 0 {
+		ahead2 = 1 // without its factor J
+	}
+	link, inverse := r.links(ahead, ahead2)
+	sum := add(r.diagonal(J).Mul(e.here), times(e.link, behind).Mul(e.before))
+	v = sum.Mul(inverse).Normal()
+	return dd.Pair{Hi: -v.Hi, Lo: -v.Lo}, link
+}
+
+// Members are kept below 2^480, so that their squares do not overflow, and shrunk with all that came
+// before. What that pushes out of the range of float64 would be zero in the end, too.
+const limit = 480
+
+func (r *Recurrence) advance(e *end, x []float64) {
+	v, link := r.next(e)
+	e.grows = math.Abs(v.Hi) >= math.Abs(e.here.Hi) || v.Hi == 0 || e.here.Hi == 0
+	e.at += e.step
+	e.before, e.here, e.link = e.here, v, link
+	x[e.at] = v.Hi
+	e.norm = add(e.norm, times(v.Mul(v), r.twice(e.at)+1))
+	if math.Abs(v.Hi) < 1<<limit {
+		return
+	}
+	for i := e.at; i >= 0 && i < len(x) && (x[i] != 0 || i == e.at-e.step); i -= e.step {
+		x[i] *= 1.0 / (1 << limit)
+	}
+	e.before, e.here = e.before.Scale(-limit, false), e.here.Scale(-limit, false)
+	e.norm = e.norm.Scale(-2*limit, false)
+}
+
+// The operations below have relative errors of some u^2, add relative to the larger operand, and all but
+// times return numbers in normal form; times adds one to the c of a c-pair.
+
+func add(a, b dd.Pair) dd.Pair {
+	s := a.Hi + b.Hi
+	t := s - a.Hi
+	e := (a.Hi - (s - t)) + (b.Hi - t) // Knuth's two-sum
+	return dd.Pair{Hi: s, Lo: e + (a.Lo + b.Lo)}.Normal()
+}
+
+func times(a dd.Pair, f float64) dd.Pair {
+	p := float64(a.Hi * f)
+	return dd.Pair{Hi: p, Lo: math.FMA(a.Hi, f, -p) + float64(a.Lo*f)}
+}
+
+func inverse(a dd.Pair) dd.Pair {
+	q := 1 / a.Hi
+	e := math.FMA(-a.Lo, q, math.FMA(-a.Hi, q, 1))
+	return dd.Pair{Hi: q, Lo: float64(q * e)}.Normal()
+}
+
+func root(a dd.Pair) dd.Pair {
+	q := math.Sqrt(a.Hi)
+	return dd.Pair{Hi: q, Lo: (math.FMA(-q, q, a.Hi) + a.Lo) / (2 * q)}.Normal()
+}
+
+// Slice returns dst with n members, or a new slice where its capacity does not suffice.
+func Slice(dst []float64, n int) []float64 {
+	if cap(dst) < n {
+		return make([]float64, n)
+	}
+	return dst[:n]
+}

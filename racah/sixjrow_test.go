@@ -1,0 +1,154 @@
+package racah_test
+
+import (
+	"fmt"
+	"math"
+	"math/rand/v2"
+	"testing"
+
+	"example.org/couplet/internal/published"
+	"example.org/couplet/racah"
+	"example.org/couplet/rational"
+)
+
+// rowErrors keeps the largest errors of the members of rows.
+type rowErrors struct {
+	ofLargest, ofMember float64 // relative to the largest member; in ulp of the member
+	members, tiny       int     // compared, and those below 1e-30 of the largest
+}
+
+// The bounds in the doc of SixJRow.
+const (
+	memberBound  = 1.25    // ulp of the member
+	largestBound = 0x1p-60 // of the largest member
+)
+
+// compare takes every step-th member of a row against the correctly rounded symbol.
+func (e *rowErrors) compare(t *testing.T, q [5]int, step int, row []float64) []float64 {
+	t.Helper()
+	jmin, row := racah.SixJRow(row, h(q[0]), h(q[1]), h(q[2]), h(q[3]), h(q[4]))
+	largest := 0.0
+	for _, v := range row {
+		largest = max(largest, math.Abs(v))
+	}
+	for i := 0; i < len(row); i += step {
+		j := jmin.Add(rational.Int(i))
+		want := racah.SixJFloat(h(q[0]), h(q[1]), j, h(q[2]), h(q[3]), h(q[4]))
+		d := math.Abs(row[i] - want)
+		e.members++
+		if want != 0 && math.Abs(want) < 1e-30*largest {
+			e.tiny++
+		}
+		ulp := max(math.Nextafter(math.Abs(want), 2)-math.Abs(want), 0x1p-1074)
+		if largest > 0 {
+			e.ofLargest = max(e.ofLargest, d/largest)
+		}
+		if d > largestBound*largest {
+			e.ofMember = max(e.ofMember, d/ulp)
+		}
+		if d > max(memberBound*ulp, largestBound*largest) {
+			t.Fatalf("%v (halves of j1 j2 l1 l2 l3), j = %v: %g, rounded %g, %.2f ulp off", q, j, row[i], want, d/ulp)
+		}
+	}
+	return row
+}
+
+func (e *rowErrors) log(t *testing.T, what string) {
+	t.Helper()
+	t.Logf("%s: %d members, %d below 1e-30 of the largest; errors up to %.2f ulp of the member, 2^%.1f of the largest", what, e.members, e.tiny, e.ofMember, math.Log2(e.ofLargest))
+}
+
+// Every row with the other arguments to 2j = 9, forbidden ones too.
+func TestSixJRowExhaustive(t *testing.T) {
+	var e rowErrors
+	var row []float64
+	const k = 10
+	for n := range k * k * k * k * k {
+		row = e.compare(t, [5]int{n % k, n / k % k, n / k / k % k, n / k / k / k % k, n / k / k / k / k}, 1, row)
+	}
+	e.log(t, "2j to 9")
+	if e.ofMember < memberBound/2 || e.members < 100000 {
+		t.Error("the bound is far too wide, or the domain too small")
+	}
+}
+
+// Random rows up to 2j = 100000.
+func TestSixJRowLarge(t *testing.T) {
+	r := rand.New(rand.NewPCG(26, 26))
+	var row []float64
+	for _, c := range []struct{ size, rows, members int }{{100, 300, 100}, {1000, 80, 12}, {4000, 20, 8}, {20000, 4, 6}, {100000, 2, 3}} {
+		var e rowErrors
+		for e.members < max(4, published.Effort(t, c.rows)*4) {
+			var q [5]int
+			for i := range q {
+				q[i] = c.size - r.IntN(c.size/2)
+			}
+			if triad(q[0], q[3], q[4]) && triad(q[2], q[1], q[4]) {
+				row = e.compare(t, q, c.size/c.members+1, row)
+			}
+		}
+		e.log(t, fmt.Sprintf("2j to %d", c.size))
+	}
+}
+
+// A row that no j fits; one that another triad forbids; whole rows by DLMF (34.5.14), with l3 = l3'.
+func TestSixJRowShapes(t *testing.T) {
+	i := rational.Int
+	if jmin, row := racah.SixJRow([]float64{1}, i(1), i(1), i(7), i(1), i(1)); len(row) != 0 || jmin != i(0) {
+		t.Errorf("%v from %v", row, jmin)
+	}
+	if jmin, row := racah.SixJRow(nil, i(1), i(1), i(1), h(1), i(1)); len(row) != 0 || jmin != i(0) {
+		t.Errorf("%v from %v", row, jmin)
+	}
+	dst := []float64{5, 5, 5, 5}
+	if jmin, row := racah.SixJRow(dst, i(1), i(1), i(1), i(1), i(5)); len(row) != 3 || jmin != i(0) || row[0] != 0 || row[2] != 0 || &row[0] != &dst[0] {
+		t.Errorf("%v from %v", row, jmin)
+	}
+	for _, size := range []int{1, 6, 301, 5000} {
+		jmin, row := racah.SixJRow(nil, h(size), h(size+1), h(size+2), h(size+1), h(2*(size/3)+1))
+		sum := 0.0
+		for k, v := range row {
+			sum += float64(jmin.Twice()+2*k+1) * float64(2*(size/3)+2) * v * v
+		}
+		if math.Abs(sum-1) > 1e-14*math.Sqrt(float64(len(row))) {
+			t.Errorf("2j = %d: the squares add up to %v", size, sum)
+		}
+	}
+	row := make([]float64, 100)
+	if n := testing.AllocsPerRun(10, func() { racah.SixJRow(row, i(30), i(20), i(25), i(28), i(22)) }); n != 0 {
+		t.Errorf("%v allocations", n)
+	}
+	for want, f := range map[string]func(){
+		"racah.SixJRow: l2 = -1; allowed: an integer or half-integer >= 0": func() { racah.SixJRow(nil, i(1), i(1), i(1), i(-1), i(1)) },
+		"racah.SixJRow: l3 = 8388609; allowed: at most 8388608 in a row":   func() { racah.SixJRow(nil, i(1), i(1), i(1), i(1), i(1<<23+1)) },
+	} {
+		if e := recovered(f); e == nil || e.Error() != want {
+			t.Errorf("panic %v, want %s", e, want)
+		}
+	}
+}
+
+func BenchmarkSixJRow(b *testing.B) {
+	for _, s := range []int{20, 2000, 100000} {
+		b.Run(fmt.Sprintf("twoj=%d", s), func(b *testing.B) {
+			b.ReportAllocs()
+			var row []float64
+			for b.Loop() {
+				_, row = racah.SixJRow(row, h(s), h(s-4), h(s-2), h(s-6), h(s-8))
+			}
+			b.ReportMetric(float64(b.Elapsed().Nanoseconds())/float64(b.N)/float64(len(row)), "ns/value")
+		})
+	}
+}
+
+func ExampleSixJRow() {
+	i := rational.Int
+	jmin, row := racah.SixJRow(nil, i(2), i(1), i(1), i(2), i(2))
+	for k, v := range row {
+		fmt.Printf("j = %v: %+.6f\n", jmin.Add(i(k)), v)
+	}
+	// Output:
+	// j = 1: +0.152753
+	// j = 2: +0.152753
+	// j = 3: +0.043644
+}
