@@ -165,7 +165,7 @@ func Effort(t testing.TB, n int) int {
 		return int(effort * float64(n))
 	}
 	if testing.Short() {
-		return n / 10
+		return max(1, n/10)
 	}
 	return n
 }
