@@ -3,6 +3,7 @@ package racah_test
 import (
 	"errors"
 	"fmt"
+	"math"
 	"testing"
 
 	"example.org/couplet/racah"
@@ -176,7 +177,13 @@ func FuzzSixJ(f *testing.F) {
 		if (bad != nil) != (err != nil) || bad == nil && verdict.Zero() != value.IsZero() {
 			t.Fatalf("%v (halves): %v, panic %v, error %v, verdict %v", q, value, bad, err, verdict)
 		}
-		if bad != nil || verdict.Zero() && verdict.Rule != wigner.Accidental {
+		if bad != nil {
+			return
+		}
+		if got := racah.SixJFloat(h(a), h(b), h(c), h(d), h(e), h(f)); math.Float64bits(got) != math.Float64bits(value.Float64()) {
+			t.Fatalf("%v (halves): %v, float %g, rounded %g", q, value, got, value.Float64())
+		}
+		if verdict.Zero() && verdict.Rule != wigner.Accidental {
 			return
 		}
 		for _, image := range sixJImages(q) {

@@ -128,6 +128,20 @@ func TestSixJRowShapes(t *testing.T) {
 	}
 }
 
+// Rows against single values.
+func FuzzSixJRow(f *testing.F) {
+	f.Add(4, 4, 4, 4, 4)
+	f.Add(100, 90, 80, 100, 90)
+	f.Add(1, 2, 3, 4, 5)
+	f.Fuzz(func(t *testing.T, a, b, d, e, g int) {
+		if min(a, b, d, e, g) < 0 || max(a, b, d, e, g) > 400 {
+			t.Skip()
+		}
+		var errors rowErrors
+		errors.compare(t, [5]int{a, b, d, e, g}, 1, nil)
+	})
+}
+
 func BenchmarkSixJRow(b *testing.B) {
 	for _, s := range []int{20, 2000, 100000} {
 		b.Run(fmt.Sprintf("twoj=%d", s), func(b *testing.B) {

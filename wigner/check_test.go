@@ -118,6 +118,7 @@ func TestMalformedArguments(t *testing.T) {
 		{"wigner.ProductStates: j1 = -1; allowed: an integer or half-integer >= 0", func() { wigner.ProductStates(h(-2), h(2)) }},
 		{"wigner.CoupledStates: j1 = -1; allowed: an integer or half-integer >= 0", func() { wigner.CoupledStates(h(-2), h(2)) }},
 		{"wigner.CouplingMatrix: j2 = -1; allowed: an integer or half-integer >= 0", func() { wigner.CouplingMatrix(h(2), h(-2)) }},
+		{"wigner.CouplingMatrixFloat: j1 = -1; allowed: an integer or half-integer >= 0", func() { wigner.CouplingMatrixFloat(nil, h(-2), h(2)) }},
 		{"wigner.Operator.Matrix: j = -1; allowed: an integer or half-integer >= 0", func() { wigner.Jx.Matrix(h(-2)) }},
 		{"wigner.Operator.Element: mp = 1/2; allowed: j plus or minus an integer, with j = 1", func() { wigner.Jx.Element(h(2), h(1), h(0)) }},
 		{"wigner.Basis: m = 2; allowed: from -1 to 1", func() { wigner.Basis(h(2), h(4)) }},

@@ -169,6 +169,9 @@ func FuzzThreeJ(f *testing.F) {
 		if verdict.Zero() != value.IsZero() {
 			t.Fatalf("value %v, verdict %v", value, verdict)
 		}
+		if f := wigner.ThreeJFloat(h(a), h(b), h(c), h(x), h(y), h(z)); math.Float64bits(f) != math.Float64bits(value.Float64()) {
+			t.Fatalf("value %v, float %g, rounded %g", value, f, value.Float64())
+		}
 		if parity((a+b+c)/2) < 0 {
 			swapped = swapped.Neg()
 		}

@@ -1,6 +1,7 @@
 package wigner_test
 
 import (
+	"slices"
 	"testing"
 
 	"example.org/couplet/rational"
@@ -165,6 +166,30 @@ func TestCouplingMatrix(t *testing.T) {
 				col++
 			}
 		}
+	}
+}
+
+// The float matrix is the exact one, rounded, and goes where it is told.
+func TestCouplingMatrixFloat(t *testing.T) {
+	dst := make([]float64, 5, 2000)
+	for a := range 6 {
+		for b := range 6 {
+			j1, j2 := rational.Halves(a), rational.Halves(b)
+			want := wigner.CouplingMatrix(j1, j2).Float64s(nil)
+			for i := range dst[:cap(dst)] {
+				dst[:cap(dst)][i] = 99
+			}
+			got := wigner.CouplingMatrixFloat(dst, j1, j2)
+			if !slices.Equal(got, want) || &got[0] != &dst[0] {
+				t.Errorf("%v x %v: %v, want %v", j1, j2, got, want)
+			}
+		}
+	}
+	if got := wigner.CouplingMatrixFloat(nil, rational.Int(0), rational.Int(0)); len(got) != 1 || got[0] != 1 {
+		t.Errorf("0 x 0: %v", got)
+	}
+	if n := testing.AllocsPerRun(10, func() { wigner.CouplingMatrixFloat(dst, rational.Int(3), rational.Halves(5)) }); n != 0 {
+		t.Errorf("%v allocations", n)
 	}
 }
 

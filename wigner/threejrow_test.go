@@ -142,6 +142,21 @@ func TestThreeJRowShapes(t *testing.T) {
 	}
 }
 
+// Rows against single values.
+func FuzzThreeJRow(f *testing.F) {
+	f.Add(4, 2, 4, -2)
+	f.Add(100, 0, 100, 0)
+	f.Add(201, 201, 33, -33)
+	f.Add(0, 0, 7, 3)
+	f.Fuzz(func(t *testing.T, a, x, b, y int) {
+		if a < 0 || b < 0 || a > 600 || b > 600 || x > a || -x > a || y > b || -y > b || (a-x)&1 != 0 || (b-y)&1 != 0 {
+			t.Skip()
+		}
+		var e rowErrors
+		e.compare(t, a, x, b, y, 1, nil)
+	})
+}
+
 func BenchmarkThreeJRow(b *testing.B) {
 	h := rational.Halves
 	for _, size := range []int{20, 2000, 100000} {
