@@ -71,3 +71,29 @@ func BenchmarkNineJ(b *testing.B) {
 		})
 	}
 }
+
+func BenchmarkSixJFloat(b *testing.B) {
+	for _, size := range []int{1, 8, 16, 30, 50, 100, 1000} {
+		b.Run(fmt.Sprintf("route=float/j=%d", size), func(b *testing.B) {
+			sets := drawSixJ(256, size)
+			b.ReportAllocs()
+			for i := 0; b.Loop(); i++ {
+				q := &sets[i&255]
+				racah.SixJFloat(q[0], q[1], q[2], q[3], q[4], q[5])
+			}
+		})
+	}
+}
+
+func BenchmarkNineJFloat(b *testing.B) {
+	for _, size := range []int{1, 8, 30, 100} {
+		b.Run(fmt.Sprintf("route=float/j=%d", size), func(b *testing.B) {
+			sets := drawNineJ(16, size)
+			b.ReportAllocs()
+			for i := 0; b.Loop(); i++ {
+				q := &sets[i&15]
+				racah.NineJFloat(q[0], q[1], q[2], q[3], q[4], q[5], q[6], q[7], q[8])
+			}
+		})
+	}
+}

@@ -40,3 +40,27 @@ func BenchmarkThreeJ(b *testing.B) {
 		})
 	}
 }
+
+func BenchmarkThreeJFloat(b *testing.B) {
+	for _, size := range []int{1, 8, 16, 30, 50, 100, 1000} {
+		b.Run(fmt.Sprintf("route=float/j=%d", size), func(b *testing.B) {
+			sets := draw(256, size)
+			b.ReportAllocs()
+			for i := 0; b.Loop(); i++ {
+				q := &sets[i&255]
+				wigner.ThreeJFloat(q[0], q[1], q[2], q[3], q[4], q[5])
+			}
+		})
+	}
+}
+
+// With -cpu 1,2 the time of an operation halves.
+func BenchmarkThreeJFloatParallel(b *testing.B) {
+	sets := draw(256, 8)
+	b.RunParallel(func(p *testing.PB) {
+		for i := 0; p.Next(); i++ {
+			q := &sets[i&255]
+			wigner.ThreeJFloat(q[0], q[1], q[2], q[3], q[4], q[5])
+		}
+	})
+}
