@@ -61,6 +61,6 @@ func SixJRow(dst []float64, j1, j2, l1, l2, l3 rational.Half) (jmin rational.Hal
 			{Hi: 1},
 		},
 	}
-	r.Solve(members, float64(f+1), (a+b+d+e)&2 != 0)
+	r.Solve(members, nil, float64(f+1), (a+b+d+e)&2 != 0)
 	return jmin, members
 }

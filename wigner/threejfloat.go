@@ -37,6 +37,9 @@ const (
 	largeError = 0x1p-98
 )
 
+// rowTotal is the J beyond which the row, in time proportional to J, is faster than the sum; a calibration.
+const rowTotal = 6000
+
 // fallbacks counts the values that only the exact route could round.
 var fallbacks atomic.Int64
 
@@ -51,6 +54,11 @@ func (r *regge) float(coefficient bool) float64 {
 	case total <= 130: // |S| < 2^127, by the same bound C(J, floor(J/2)), see binsum.Triple
 		f, ok = r.twoWords(coefficient)
 	default:
+		if total > rowTotal {
+			if f, ok = r.byRow(coefficient); ok {
+				return f
+			}
+		}
 		f, ok = r.manyWords(coefficient)
 	}
 	if ok {

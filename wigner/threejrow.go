@@ -1,6 +1,8 @@
 package wigner
 
 import (
+	"math"
+
 	"example.org/couplet/internal/argument"
 	"example.org/couplet/internal/dd"
 	"example.org/couplet/internal/row"
@@ -34,19 +36,58 @@ func ThreeJRow(dst []float64, j1, m1, j2, m2 rational.Half) (jmin rational.Half,
 	if m1.Abs().Cmp(j1) > 0 || m2.Abs().Cmp(j2) > 0 {
 		return rational.Half{}, dst[:0]
 	}
-	a, b, x, y := j1.Twice(), j2.Twice(), m1.Twice(), m2.Twice()
-	first := max(a-b, b-a, x+y, -x-y)
-	members = row.Slice(dst, (a+b-first)/2+1)
-	// DLMF (34.3.15) for the cyclic symbol (j j1 j2; m m1 m2), times 16:
-	//   l(2j) = 8 sqrt[ (j^2-(j1-j2)^2) ((j1+j2+1)^2-j^2) (j^2-m^2) ]
-	//   d(2j) = -16 (2j+1) { [j1(j1+1) - j2(j2+1)] m - j(j+1) (m2-m1) }
+	r, n, negative := newThreeJRow(j1.Twice(), m1.Twice(), j2.Twice(), m2.Twice())
+	members = row.Slice(dst, n)
+	r.Solve(members, nil, 1, negative)
+	return rational.Halves(r.First), members
+}
+
+// newThreeJRow returns the recurrence of a row, how many members it has, and whether the last is negative;
+// arguments are twice their values.
+//
+// It is DLMF (34.3.15) for the cyclic symbol (j j1 j2; m m1 m2), times 16:
+//
+//	l(2j) = 8 sqrt[ (j^2-(j1-j2)^2) ((j1+j2+1)^2-j^2) (j^2-m^2) ]
+//	d(2j) = -16 (2j+1) { [j1(j1+1) - j2(j2+1)] m - j(j+1) (m2-m1) }
+func newThreeJRow(a, x, b, y int) (r row.Recurrence, n int, negative bool) {
 	square := func(n int) int64 { return int64(n) * int64(n+2) }
-	r := row.Recurrence{
-		First: first,
+	r = row.Recurrence{
+		First: max(a-b, b-a, x+y, -x-y),
 		D:     [4]float64{float64(a - b), float64(a + b + 2), float64(x + y)},
 		N:     3,
 		C:     [3]dd.Pair{dd.FromInt64((square(b) - square(a)) * int64(x+y)), dd.FromInt64(int64(x - y))},
 	}
-	r.Solve(members, 1, (a-b+x+y)&2 != 0)
-	return rational.Halves(first), members
+	return r, (a+b-r.First)/2 + 1, (a-b+x+y)&2 != 0
+}
+
+// threeJGap is the distance between the eigenvalues in the recurrence, for its Error: C1 is 2(m1-m2), and
+// with m1+m2 fixed m1-m2 goes in steps of 2. The matrix is that of J1z - J2z in the coupled states.
+const threeJGap = 4
+
+// byRow is the route for large symbols: it computes the row over the largest momentum, with a bound that is
+// proved after the fact, and takes the member from it. ok is false where that leaves the rounding open: close
+// to zeros, and for values far below the largest of the row.
+func (r *regge) byRow(coefficient bool) (f float64, ok bool) {
+	c := 0 // the largest momentum has the smallest entry in the first row
+	for i, n := range r[:3] {
+		if n < r[c] {
+			c = i
+		}
+	}
+	twiceJ := func(i int) int { return r[3+i%3] + r[6+i%3] }
+	twiceM := func(i int) int { return r[6+i%3] - r[3+i%3] }
+	rec, n, negative := newThreeJRow(twiceJ(c+1), twiceM(c+1), twiceJ(c+2), twiceM(c+2))
+	buffer := make([]float64, 2*n)
+	x, low := buffer[:n], buffer[n:]
+	rec.Solve(x, low, 1, negative)
+	k := (twiceJ(c) - rec.First) / 2
+	v := dd.Pair{Hi: x[k], Lo: low[k]}
+	bound := rec.Error(x, low, 1, threeJGap) / math.Sqrt(float64(twiceJ(c)+1)) / math.Abs(v.Hi)
+	if !(bound < 0x1p-60) {
+		return 0, false
+	}
+	if coefficient {
+		v = v.Mul(dd.Sqrt(r.twiceJ3()+1)).Scale(0, r.parity() != 0)
+	}
+	return v.Round(bound*(1+0x1p-20) + 0x1p-100)
 }

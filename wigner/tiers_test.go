@@ -118,3 +118,86 @@ func relative(p dd.Pair, exp int, want *big.Float) float64 {
 	f, _ := got.Sub(got, want).Quo(got, want).Float64()
 	return math.Abs(f)
 }
+
+// The route by rows, forced on small symbols and large ones, gives the bits of the routes by sums where it
+// does not refuse, and refuses little but zeros and what is far below the largest of its row.
+func TestByRow(t *testing.T) {
+	taken, refused := 0, 0
+	compare := func(r *regge, want func(coefficient bool) float64) {
+		for _, coefficient := range []bool{false, true} {
+			f, ok := r.byRow(coefficient)
+			if !ok {
+				refused++
+				continue
+			}
+			taken++
+			if w := want(coefficient); math.Float64bits(f) != math.Float64bits(w) {
+				t.Fatalf("square %v, coefficient %v: %g by its row, %g", *r, coefficient, f, w)
+			}
+		}
+	}
+	squares(9, func(r *regge) { compare(r, r.float) })
+	random := rand.New(rand.NewPCG(27, 27))
+	h := rational.Halves
+	for _, c := range []struct{ size, draws int }{{40, 1000}, {400, 300}, {4000, 20}, {40000, 2}} {
+		for range c.draws {
+			a, b := c.size-random.IntN(c.size/2+1), c.size-random.IntN(c.size/2+1)
+			j3 := max(a-b, b-a) + 2*random.IntN(min(a, b)+1)
+			x, y := a-2*random.IntN(a+1), b-2*random.IntN(b+1)
+			var r regge
+			if r.set(h(a), h(b), h(j3), h(x), h(y), h(-x-y)) {
+				compare(&r, func(coefficient bool) float64 {
+					f, ok := r.manyWords(coefficient)
+					if !ok {
+						f = r.exact(coefficient).Float64()
+					}
+					return f
+				})
+			}
+		}
+	}
+	t.Logf("%d values by their rows, %d refused", taken, refused)
+	if refused > taken/20 {
+		t.Error("too many refused")
+	}
+}
+
+// The bound that is proved after the fact holds, and is not much wider than the error.
+func TestRowError(t *testing.T) {
+	r := rand.New(rand.NewPCG(28, 28))
+	h := rational.Halves
+	least := math.Inf(1)
+	for _, size := range []int{3, 8, 20, 60, 200} {
+		for range 12 {
+			a, b := r.IntN(size+1), r.IntN(size+1)
+			x, y := a-2*r.IntN(a+1), b-2*r.IntN(b+1)
+			rec, n, negative := newThreeJRow(a, x, b, y)
+			members, low := make([]float64, n), make([]float64, n)
+			rec.Solve(members, low, 1, negative)
+			bound := rec.Error(members, low, 1, threeJGap)
+			sum := new(big.Float).SetPrec(300)
+			for i := range members {
+				j := rec.First + 2*i
+				d := new(big.Float).SetPrec(300).SetFloat64(members[i])
+				d.Add(d, new(big.Float).SetPrec(300).SetFloat64(low[i]))
+				d.Sub(d, ThreeJ(h(a), h(b), h(j), h(x), h(y), h(-x-y)).Float(300))
+				d.Mul(d, d)
+				sum.Add(sum, d.Mul(d, new(big.Float).SetInt64(int64(j+1))))
+			}
+			root, _ := sum.Sqrt(sum).Float64()
+			if root > bound {
+				t.Fatalf("2j1, 2m1, 2j2, 2m2 = %d %d %d %d: error %g, bound %g", a, x, b, y, root, bound)
+			}
+			if bound > 0x1p-85 {
+				t.Errorf("2j1, 2m1, 2j2, 2m2 = %d %d %d %d: bound %g", a, x, b, y, bound)
+			}
+			if root > 0 {
+				least = min(least, bound/root)
+			}
+		}
+	}
+	t.Logf("the bound is at least %.0f times the error", least)
+	if least > 200 {
+		t.Error("the bound is far too wide")
+	}
+}

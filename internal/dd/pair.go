@@ -64,3 +64,11 @@ func (a Pair) Round(err float64) (f float64, ok bool) {
 	f = a.Hi + (a.Lo - e)
 	return f, f == a.Hi+(a.Lo+e)
 }
+
+// Sqrt returns the square root of n > 0, below 2^53, in normal form with an error below 8 u^2: the root
+// rounded, and half of what is left of n divided by it.
+func Sqrt(n int) Pair {
+	x := float64(n)
+	q := math.Sqrt(x)
+	return Pair{q, math.FMA(-q, q, x) / (2 * q)}.Normal()
+}
