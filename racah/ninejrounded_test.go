@@ -75,7 +75,7 @@ func TestRoundedNineJRandom(t *testing.T) {
 	}
 }
 
-// Published values pin the order of the arguments; no allocation while every j is at most 8; rules and
+// Published values pin the order of the arguments; no allocation while every j is at most 100; rules and
 // panics are those of NineJ.
 func TestNineJFloat(t *testing.T) {
 	for _, row := range published.Rows(t, "published", "sixj_ninej_values.csv") {
@@ -87,8 +87,8 @@ func TestNineJFloat(t *testing.T) {
 			t.Errorf("%g, published %v", got, row)
 		}
 	}
-	for _, size := range []int{1, 4, 8} {
-		sets := drawNineJ(100, size)
+	for _, size := range []int{1, 4, 8, 16, 30, 50, 100} {
+		sets := drawNineJ(60, size)
 		if n := testing.AllocsPerRun(4, func() {
 			for _, q := range sets {
 				racah.NineJFloat(q[0], q[1], q[2], q[3], q[4], q[5], q[6], q[7], q[8])

@@ -47,12 +47,23 @@ func SixJRow(dst []float64, j1, j2, l1, l2, l3 rational.Half) (jmin rational.Hal
 		clear(members)
 		return jmin, members
 	}
-	// DLMF (34.5.11) for {j j1 j2; l3 l1 l2}, times 32. With A for 2j1 (2j1+2) and so on, the bracket is
-	//   1/16 [ J^2(J+2)^2 + (2F - A - B - D - E) J(J+2) + (A-B)(E-D) ]
+	r, _, negative := newSixJRow(a, b, d, e, f)
+	r.Solve(members, nil, float64(f+1), negative)
+	return jmin, members
+}
+
+// newSixJRow returns the recurrence of a row, how many members it has, and whether the last is negative;
+// arguments are twice j1, j2, l1, l2, l3, and fulfill all rules.
+//
+// It is DLMF (34.5.11) for {j j1 j2; l3 l1 l2}, times 32. With A for 2j1 (2j1+2), B for j2, D, E, F for l1, l2,
+// l3 alike, the bracket there is
+//
+//	1/16 [ J^2(J+2)^2 + (2F - A - B - D - E) J(J+2) + (A-B)(E-D) ]
+func newSixJRow(a, b, d, e, f int) (r row.Recurrence, n int, negative bool) {
 	square := func(n int) int64 { return int64(n) * int64(n+2) }
 	ab, ed := float64(square(a)-square(b)), float64(square(e)-square(d))
-	r := row.Recurrence{
-		First: first,
+	r = row.Recurrence{
+		First: max(distance(a, b), distance(d, e)),
 		D:     [4]float64{float64(a - b), float64(a + b + 2), float64(d - e), float64(d + e + 2)},
 		N:     4,
 		C: [3]dd.Pair{
@@ -61,6 +72,14 @@ func SixJRow(dst []float64, j1, j2, l1, l2, l3 rational.Half) (jmin rational.Hal
 			{Hi: 1},
 		},
 	}
-	r.Solve(members, nil, float64(f+1), (a+b+d+e)&2 != 0)
-	return jmin, members
+	return r, (min(a+b, d+e)-r.First)/2 + 1, (a+b+d+e)&2 != 0
+}
+
+// sixJGap returns the distance between the eigenvalues in the recurrence, for its Error, f being 2 l3: C1 has
+// the part 2F = 2f(f+2), and l3 goes in steps of 1, f in steps of 2.
+func sixJGap(f int) float64 {
+	if f < 2 { // there is no smaller one
+		return float64(8 * (f + 2))
+	}
+	return float64(8 * f)
 }

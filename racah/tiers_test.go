@@ -125,7 +125,7 @@ func TestFrontErrors(t *testing.T) {
 func TestNineJTiers(t *testing.T) {
 	r := rand.New(rand.NewPCG(24, 24))
 	worstSmall, worstLarge := 0.0, 0.0
-	cases := 0
+	cases, refused, zeros := 0, 0, 0
 	for range 3000000 {
 		var q square.Array
 		size := []int{4, 8, 16}[r.IntN(3)]
@@ -168,9 +168,20 @@ func TestNineJTiers(t *testing.T) {
 		value := exact.Float64()
 		few, ok := nineJFewWords(&q)
 		many, okMany := nineJManyWords(&q)
+		if rows, ok := nineJByRows(&q); !ok {
+			refused++
+			if value == 0 {
+				zeros++
+			}
+		} else if math.Float64bits(rows) != math.Float64bits(value) {
+			t.Fatalf("%v: %g by rows, exact %g", q, rows, value)
+		}
 		if !ok || !okMany || math.Float64bits(few) != math.Float64bits(value) || math.Float64bits(many) != math.Float64bits(value) {
 			t.Fatalf("%v: %g, %v by few words, %g, %v by many, exact %g", q, few, ok, many, okMany, value)
 		}
+	}
+	if refused > zeros+cases/1000 || zeros == 0 {
+		t.Errorf("the route by rows refused %d, %d of them zeros", refused, zeros)
 	}
 	t.Logf("%d symbols; largest errors: %.1f of %.0f u^2 and %.1f of %.0f u^2", cases, worstSmall*0x1p106, nineJSmallError*0x1p106, worstLarge*0x1p106, largeError*0x1p106)
 	if cases < 2000 || worstSmall > nineJSmallError || worstLarge > largeError {
@@ -196,4 +207,53 @@ func relative(p dd.Pair, exp int, want *big.Float) float64 {
 	got.SetMantExp(got, exp)
 	f, _ := got.Sub(got, want).Quo(got, want).Float64()
 	return math.Abs(f)
+}
+
+// The bound that is proved after the fact holds for rows of 6j symbols, and is not much wider than the error.
+func TestRowError(t *testing.T) {
+	r := rand.New(rand.NewPCG(29, 29))
+	h := rational.Halves
+	least, cases := math.Inf(1), 0
+	for range 20000 {
+		size := []int{2, 6, 20, 60, 200}[r.IntN(5)]
+		var q [5]int
+		for i := range q {
+			q[i] = r.IntN(size + 1)
+		}
+		a, b, d, e, f := q[0], q[1], q[2], q[3], q[4]
+		if cases == 300 || wigner.Triad(h(a), h(e), h(f)) != wigner.NonZero || wigner.Triad(h(d), h(b), h(f)) != wigner.NonZero {
+			continue
+		}
+		rec, n, negative := newSixJRow(a, b, d, e, f)
+		if n < 1 {
+			continue
+		}
+		cases++
+		members, low := make([]float64, n), make([]float64, n)
+		rec.Solve(members, low, float64(f+1), negative)
+		bound := rec.Error(members, low, float64(f+1), sixJGap(f))
+		sum := new(big.Float).SetPrec(300)
+		for i := range members {
+			j := rec.First + 2*i
+			v := new(big.Float).SetPrec(300).SetFloat64(members[i])
+			v.Add(v, new(big.Float).SetPrec(300).SetFloat64(low[i]))
+			v.Sub(v, SixJ(h(a), h(b), h(j), h(d), h(e), h(f)).Float(300))
+			v.Mul(v, v)
+			sum.Add(sum, v.Mul(v, new(big.Float).SetInt64(int64(j+1)*int64(f+1))))
+		}
+		root, _ := sum.Sqrt(sum).Float64()
+		if root > bound {
+			t.Fatalf("%v (halves of j1 j2 l1 l2 l3): error %g, bound %g", q, root, bound)
+		}
+		if bound > 0x1p-85 {
+			t.Errorf("%v (halves of j1 j2 l1 l2 l3): bound %g", q, bound)
+		}
+		if root > 0 {
+			least = min(least, bound/root)
+		}
+	}
+	t.Logf("%d rows; the bound is at least %.0f times the error", cases, least)
+	if cases < 300 || least > 200 {
+		t.Error("too few rows, or the bound is far too wide")
+	}
 }

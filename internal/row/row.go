@@ -257,3 +257,16 @@ func Slice(dst []float64, n int) []float64 {
 	}
 	return dst[:n]
 }
+
+// Sum adds up products in double-double.
+type Sum struct {
+	Value     dd.Pair
+	Magnitude float64 // sum of the absolute values
+}
+
+// Add adds w*v.
+func (s *Sum) Add(v dd.Pair, w float64) {
+	t := times(v, w).Normal()
+	s.Value = add(s.Value, t)
+	s.Magnitude += math.Abs(t.Hi)
+}
