@@ -176,15 +176,16 @@ func nineJByRows(t *square.Array) (f float64, ok bool) {
 		p, q, r := dd.Pair{Hi: x[0][k], Lo: low[0][k]}, dd.Pair{Hi: x[1][k], Lo: low[1][k]}, dd.Pair{Hi: x[2][k], Lo: low[2][k]}
 		w := float64(first + 2*k + 1)
 		sum.Add(p.Mul(q).Mul(r), w)
-		others[0] += w * (q.Hi * r.Hi) * (q.Hi * r.Hi)
-		others[1] += w * (r.Hi * p.Hi) * (r.Hi * p.Hi)
-		others[2] += w * (p.Hi * q.Hi) * (p.Hi * q.Hi)
+		qr, rp, pq := q.Hi*r.Hi, r.Hi*p.Hi, p.Hi*q.Hi
+		others[0] += float64(w * qr * qr)
+		others[1] += float64(w * rp * rp)
+		others[2] += float64(w * pq * pq)
 	}
 	bound := float64(40+2*n) * 0x1p-106 * sum.Magnitude
 	for k := range bounds {
-		bound += bounds[k] / math.Sqrt(weights[k]) * math.Sqrt(others[k])
+		bound += float64(bounds[k] / math.Sqrt(weights[k]) * math.Sqrt(others[k]))
 	}
-	bound *= 1.01 / math.Abs(sum.Value.Hi) // for the roundings here and the second order
+	bound = float64(bound * 1.01 / math.Abs(sum.Value.Hi)) // for the roundings here and the second order
 	if !(bound < 0x1p-58) {
 		return 0, false
 	}

@@ -9,8 +9,17 @@ import (
 )
 
 // SixJFloat returns the float64 nearest to the 6j symbol of [SixJ], to even on a tie, whatever its size.
-// Zeros and panics are those of SixJ. It allocates nothing while every triad adds up to 300 at most.
+// Zeros and panics are those of SixJ. It allocates nothing while every triad adds up to 300 at most, but for
+// tables that are built by the first calls.
 func SixJFloat(j1, j2, j3, l1, l2, l3 rational.Half) float64 {
+	a, b, c, d, e, f := j1.Twice(), j2.Twice(), j3.Twice(), l1.Twice(), l2.Twice(), l3.Twice()
+	if max(a, b, c, d, e, f) <= smallTop {
+		v, ok := small().at(a, b, c, d, e, f)
+		if !ok {
+			forbidden("racah.SixJFloat", &sixJNames, j1, j2, j3, l1, l2, l3)
+		}
+		return v
+	}
 	var k tetrad
 	if !k.set(j1, j2, j3, l1, l2, l3) {
 		forbidden("racah.SixJFloat", &sixJNames, j1, j2, j3, l1, l2, l3)

@@ -9,12 +9,15 @@ import (
 
 // ThreeJFloat returns the float64 nearest to the 3j symbol of [ThreeJ], to even on a tie, whatever its
 // size. Zeros and panics are those of ThreeJ; a value below the subnormal numbers becomes a zero with its
-// sign. It allocates nothing while j1+j2+j3 <= 300.
+// sign. It allocates nothing while j1+j2+j3 <= 300, but for tables that are built by the first calls.
 func ThreeJFloat(j1, j2, j3, m1, m2, m3 rational.Half) float64 {
 	var r regge
 	if !r.set(j1, j2, j3, m1, m2, m3) {
 		forbidden("wigner.ThreeJFloat", &threeJNames, j1, j2, j3, m1, m2, m3)
 		return 0
+	}
+	if max(j1.Twice(), j2.Twice(), j3.Twice()) <= smallTop {
+		return small().at(&r)
 	}
 	return r.float(false)
 }

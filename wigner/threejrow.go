@@ -89,5 +89,5 @@ func (r *regge) byRow(coefficient bool) (f float64, ok bool) {
 	if coefficient {
 		v = v.Mul(dd.Sqrt(r.twiceJ3()+1)).Scale(0, r.parity() != 0)
 	}
-	return v.Round(bound*(1+0x1p-20) + 0x1p-100)
+	return v.Round(float64(bound*(1+0x1p-20)) + 0x1p-100)
 }

@@ -217,11 +217,12 @@ func (r *Recurrence) Error(x, low []float64, w, gap float64) float64 {
 		}
 		scale := 1 / (2 * (J + 1) * (J + 2) * factor)
 		weight := w * (J + 1)
-		residue += weight * (sum.Hi * scale) * (sum.Hi * scale)
-		size += weight * (magnitude * scale) * (magnitude * scale)
+		sum.Hi, magnitude = float64(sum.Hi*scale), float64(magnitude*scale)
+		residue += float64(weight * sum.Hi * sum.Hi)
+		size += float64(weight * magnitude * magnitude)
 	}
-	length := math.Sqrt(residue) + 40*uu*math.Sqrt(size)
-	return 1.01*length/gap + float64(n+20)*4*uu // 1.01 for the roundings here and the second order
+	length := math.Sqrt(residue) + float64(40*uu*math.Sqrt(size))
+	return float64(1.01*length/gap) + float64(float64(n+20)*4*uu) // 1.01 for the roundings here and the second order
 }
 
 // The operations below have relative errors of some u^2, add relative to the larger operand, and all but
