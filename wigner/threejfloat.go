@@ -51,17 +51,15 @@ var fallbacks atomic.Int64
 func (r *regge) float(coefficient bool) float64 {
 	var f float64
 	var ok bool
-	switch total := r.total(); {
-	case total <= 66: // |S| < 2^63
+	total := r.total()
+	if total <= 66 { // |S| <= C(66, 33) < 2^63, see binsum.Triple
 		f, ok = r.oneWord(coefficient)
-	case total <= 130: // |S| < 2^127, by the same bound C(J, floor(J/2)), see binsum.Triple
+	} else if total < dd.BinomialTops {
 		f, ok = r.twoWords(coefficient)
-	default:
-		if total > rowTotal {
-			if f, ok = r.byRow(coefficient); ok {
-				return f
-			}
-		}
+	} else if total > rowTotal {
+		f, ok = r.byRow(coefficient)
+	}
+	if !ok {
 		f, ok = r.manyWords(coefficient)
 	}
 	if ok {
@@ -80,19 +78,22 @@ func (r *regge) oneWord(coefficient bool) (f float64, ok bool) {
 	if r.sign(r, coefficient) != 0 {
 		s = -s
 	}
-	return r.smallFront(dd.FromInt64(s), coefficient).Round(smallError)
+	return r.smallFront(coefficient).Mul(dd.FromInt64(s)).Round(smallError)
 }
 
+// twoWords returns ok = false, too, where two words are not sure to hold the sum. No symbol exceeds 1, so that
+// |S| <= 1/front.
 func (r *regge) twoWords(coefficient bool) (f float64, ok bool) {
+	front := r.smallFront(coefficient)
+	if front.Hi < 0x1p-126 {
+		return 0, false
+	}
 	sum := r.sum()
 	s := dd.FromMod128(sum.Mod128())
 	if s.Hi == 0 {
 		return 0, true
 	}
-	if r.sign(r, coefficient) != 0 {
-		s.Hi, s.Lo = -s.Hi, -s.Lo
-	}
-	return r.smallFront(s, coefficient).Round(smallError)
+	return front.Mul(s.Scale(0, r.sign(r, coefficient) != 0)).Round(smallError)
 }
 
 func (r *regge) manyWords(coefficient bool) (f float64, ok bool) {
@@ -114,17 +115,18 @@ func (r *regge) manyWords(coefficient bool) (f float64, ok bool) {
 	return f, ok
 }
 
-// smallFront returns s times the square root of
+// smallFront returns the square root of
 //
 //	Π (ji+mi)!(ji-mi)! / (n1! n2! n3! (J+1)!)
 //	  = C(2j1, n1) C(2j2, n1) / [ (J+1) C(J, n1) C(2j1, j1+m1) C(2j2, j2+m2) C(2j3, j3+m3) ]
 //
 // times 2j3+1 for a Clebsch-Gordan coefficient.
 //
-// In units of u^2 the six entries have errors of 19 each, sqrt(2j3+1) of 1, s of 2; the products of
-// 1-pairs cost 7 each, u*s = 3*3 costs 25, w*sqrt = 3*1 costs 13, v*w = 3*5 costs 37, the last 7*9 costs
-// 105 (dd.Pair.Mul): 319 in all with the 2 of the rounding, below 2^9 u^2 = 2^-97.
-func (r *regge) smallFront(s dd.Pair, coefficient bool) dd.Pair {
+// In units of u^2 the six entries have errors of 19 each, sqrt(2j3+1) of 1; the products of 1-pairs cost 7
+// each, w*sqrt = 3*1 costs 13, v*w = 3*5 costs 37, u*(vw) = 3*9 costs 61, and the product with the sum, 13*3,
+// costs 75 with 2 more for the sum itself (dd.Pair.Mul): 326 in all with the 2 of the rounding, below
+// 2^9 u^2 = 2^-97.
+func (r *regge) smallFront(coefficient bool) dd.Pair {
 	d := dd.SqrtBinomials()
 	n3, n2, n1 := r[0], r[1], r[2]
 	u := d.Root[dd.Place(n1+n2, n1)].Mul(d.Root[dd.Place(n1+n3, n1)])
@@ -133,7 +135,7 @@ func (r *regge) smallFront(s dd.Pair, coefficient bool) dd.Pair {
 	if coefficient {
 		w = w.Mul(dd.Factorials(dd.BinomialTops).Sqrt[n2+n3+1])
 	}
-	return u.Mul(s).Mul(v.Mul(w))
+	return u.Mul(v.Mul(w))
 }
 
 // largeFront returns the square root of the same quotient of factorials. It and sqrt(2j3+1) are eleven

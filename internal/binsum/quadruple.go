@@ -46,6 +46,18 @@ func (s *Quadruple) Mod128() (high, low uint64) {
 	first, last := s.limits()
 	t := binomials()
 	h, i, j, k := place(first+1, s.T+1), place(s.N1, first-s.S1), place(s.N2, first-s.S2), place(s.N3, first-s.S3)
+	if max(s.N1, s.N2, s.N3) <= oneWordTop { // two thirds of the multiplications
+		for range last - first + 1 {
+			a, b := mulWords(t.low[i], t.low[j], t.low[k])
+			a, b = Mul128(a, b, t.high[h], t.low[h])
+			high, low = sub128(a, b, high, low)
+			h += tableTops
+			i++
+			j++
+			k++
+		}
+		return negated(high, low, last)
+	}
 	for range last - first + 1 {
 		a, b := Mul128(t.high[h], t.low[h], t.high[i], t.low[i])
 		a, b = Mul128(a, b, t.high[j], t.low[j])
@@ -56,10 +68,7 @@ func (s *Quadruple) Mod128() (high, low uint64) {
 		j++
 		k++
 	}
-	if last&1 != 0 {
-		high, low = Negate128(high, low)
-	}
-	return high, low
+	return negated(high, low, last)
 }
 
 // Word returns S where a signed word is sure to hold it; ok is false elsewhere.

@@ -6,7 +6,10 @@ import (
 )
 
 // tableTops bounds the tops of the binomials in the table.
-const tableTops = 132
+const tableTops = 156
+
+// oneWordTop is the last row of binomials that fit into a word each: C(67, 33) < 2^64.
+const oneWordTop = 67
 
 // pascal holds C(top, low) modulo 2^128, in two words, at index place(top, low).
 type pascal struct {

@@ -17,7 +17,7 @@ func (s *Triple) limits() (first, last int) {
 	return max(0, s.A-s.N2, s.B-s.N3), min(s.N1, s.A, s.B)
 }
 
-// Mod64 returns S modulo 2^64. The N must be below 132.
+// Mod64 returns S modulo 2^64. The N must be below 156.
 func (s *Triple) Mod64() uint64 {
 	first, last := s.limits()
 	t := &binomials().low
@@ -35,11 +35,21 @@ func (s *Triple) Mod64() uint64 {
 	return total
 }
 
-// Mod128 returns S modulo 2^128, in two words. The N must be below 132.
+// Mod128 returns S modulo 2^128, in two words. The N must be below 156.
 func (s *Triple) Mod128() (high, low uint64) {
 	first, last := s.limits()
 	t := binomials()
 	i, j, k := place(s.N1, first), place(s.N2, s.A-first), place(s.N3, s.B-first)
+	if max(s.N1, s.N2, s.N3) <= oneWordTop { // half the multiplications
+		for range last - first + 1 {
+			h, l := mulWords(t.low[i], t.low[j], t.low[k])
+			high, low = sub128(h, l, high, low)
+			i++
+			j--
+			k--
+		}
+		return negated(high, low, last)
+	}
 	for range last - first + 1 {
 		h, l := Mul128(t.high[i], t.low[i], t.high[j], t.low[j])
 		h, l = Mul128(h, l, t.high[k], t.low[k])
@@ -48,10 +58,7 @@ func (s *Triple) Mod128() (high, low uint64) {
 		j--
 		k--
 	}
-	if last&1 != 0 {
-		high, low = Negate128(high, low)
-	}
-	return high, low
+	return negated(high, low, last)
 }
 
 // Int sets z to S and returns it.

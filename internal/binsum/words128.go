@@ -8,6 +8,21 @@ func Mul128(ah, al, bh, bl uint64) (high, low uint64) {
 	return high + ah*bl + al*bh, low
 }
 
+// mulWords returns the product of three numbers of one word modulo 2^128.
+func mulWords(a, b, c uint64) (high, low uint64) {
+	h, l := bits.Mul64(a, b)
+	high, low = bits.Mul64(l, c)
+	return high + h*c, low
+}
+
+// negated returns (-1)^n times a number of two words modulo 2^128.
+func negated(high, low uint64, n int) (h, l uint64) {
+	if n&1 != 0 {
+		return Negate128(high, low)
+	}
+	return high, low
+}
+
 // Add128 returns the sum of two numbers of two words modulo 2^128.
 func Add128(ah, al, bh, bl uint64) (high, low uint64) {
 	low, carry := bits.Add64(al, bl, 0)

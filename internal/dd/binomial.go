@@ -3,7 +3,7 @@ package dd
 import "sync/atomic"
 
 // BinomialTops bounds n in the table of binomials C(n, k).
-const BinomialTops = 132
+const BinomialTops = 156
 
 // BinomialError bounds the relative errors of the entries of [Binomials], in units of u^2.
 const BinomialError = 19
