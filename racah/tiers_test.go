@@ -257,3 +257,42 @@ func TestRowError(t *testing.T) {
 		t.Error("too few rows, or the bound is far too wide")
 	}
 }
+
+// A solution with an admixture of a neighboring eigenvector, l3-1 or l3+1, which the residue must show
+// through the gap: the bound is the admixture at least, and for the nearer of the two not much more.
+func TestRowErrorOfAdmixture(t *testing.T) {
+	const admixture = 0x1p-40
+	cases := 0
+	const k = 9
+	for n := range k * k * k * k {
+		a, b, d, e := n%k, n/k%k, n/k/k%k, n/k/k/k
+		if (a+b+d+e)&1 != 0 {
+			continue
+		}
+		lowest, highest := max(distance(a, e), distance(b, d)), min(a+e, b+d)
+		for f := lowest; f <= highest; f += 2 {
+			for _, other := range []int{f - 2, f + 2} {
+				if other < lowest || other > highest {
+					continue
+				}
+				r, n, negative := newSixJRow(a, b, d, e, f)
+				v, low := make([]float64, n), make([]float64, n)
+				r.Solve(v, low, float64(f+1), negative)
+				next, _, negative := newSixJRow(a, b, d, e, other)
+				mixed := make([]float64, n)
+				next.Solve(mixed, nil, float64(f+1), negative) // of the same length, in the weight of f
+				for i := range v {
+					v[i] += admixture * mixed[i]
+				}
+				nearer := other < f || f < 2
+				if bound := r.Error(v, low, float64(f+1), sixJGap(f)); bound < admixture*(1-0x1p-10) || nearer && bound > 1.02*admixture {
+					t.Fatalf("%d %d %d %d %d (halves), with %d: bound %g for an admixture of %g", a, b, d, e, f, other, bound, admixture)
+				}
+				cases++
+			}
+		}
+	}
+	if cases < 5000 {
+		t.Errorf("only %d cases", cases)
+	}
+}

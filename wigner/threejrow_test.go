@@ -90,6 +90,8 @@ func TestThreeJRowLarge(t *testing.T) {
 				x = a - 2*r.IntN(3)
 			case 1:
 				x, y = a&1, -(b & 1)
+			case 2: // a peak next to one end
+				x, y = a-2*r.IntN(3), 2*r.IntN(3)-b
 			}
 			row = e.compare(t, a, x, b, y, c.size/c.members+1, row)
 		}

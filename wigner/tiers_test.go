@@ -200,3 +200,29 @@ func TestRowError(t *testing.T) {
 		t.Error("the bound is far too wide")
 	}
 }
+
+// A solution with an admixture of the neighboring eigenvector, which the residue must show through the gap:
+// the bound is the admixture, neither less nor much more.
+func TestRowErrorOfAdmixture(t *testing.T) {
+	const admixture = 0x1p-40
+	for a := 1; a <= 12; a++ {
+		for b := 1; b <= 12; b++ {
+			for x := -a; x < a; x += 2 {
+				for y := -b + 2; y <= b; y += 2 {
+					r, n, negative := newThreeJRow(a, x, b, y)
+					v, low := make([]float64, n), make([]float64, n)
+					r.Solve(v, low, 1, negative)
+					next, _, negative := newThreeJRow(a, x+2, b, y-2)
+					other := make([]float64, n)
+					next.Solve(other, nil, 1, negative)
+					for i := range v {
+						v[i] += admixture * other[i]
+					}
+					if bound := r.Error(v, low, 1, threeJGap); bound < admixture*(1-0x1p-10) || bound > 1.02*admixture {
+						t.Fatalf("2j1, 2m1, 2j2, 2m2 = %d %d %d %d: bound %g for an admixture of %g", a, x, b, y, bound, admixture)
+					}
+				}
+			}
+		}
+	}
+}

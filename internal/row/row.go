@@ -156,7 +156,7 @@ const limit = 480
 
 func (r *Recurrence) advance(e *end, x, low []float64) {
 	v, link := r.next(e)
-	e.grows = math.Abs(v.Hi) >= math.Abs(e.here.Hi) || v.Hi == 0 || e.here.Hi == 0
+	e.grows = math.Abs(v.Hi) >= math.Abs(e.here.Hi) || v.Hi == 0 // a zero in every second place is no decay
 	e.at += e.step
 	e.before, e.here, e.link = e.here, v, link
 	x[e.at] = v.Hi
@@ -167,7 +167,13 @@ func (r *Recurrence) advance(e *end, x, low []float64) {
 	if math.Abs(v.Hi) < 1<<limit {
 		return
 	}
-	for i := e.at; i >= 0 && i < len(x) && (x[i] != 0 || i == e.at-e.step); i -= e.step {
+	zeros := 0 // two in a row are all that follow; one may stand between others
+	for i := e.at; i >= 0 && i < len(x) && zeros < 2; i -= e.step {
+		if x[i] == 0 {
+			zeros++
+			continue
+		}
+		zeros = 0
 		x[i] *= 1.0 / (1 << limit)
 		if low != nil {
 			low[i] *= 1.0 / (1 << limit)
