@@ -6,20 +6,11 @@ import (
 	"math"
 	"testing"
 
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/racah"
 	"example.org/couplet/rational"
 	"example.org/couplet/wigner"
 )
-
-func recovered(f func()) (e *rational.ArgumentError) {
-	defer func() {
-		if r := recover(); r != nil {
-			e = r.(*rational.ArgumentError)
-		}
-	}()
-	f()
-	return nil
-}
 
 // wantRule returns the first rule that a triad breaks, by the definition.
 func wantRule(triads ...[3]int) wigner.Rule {
@@ -48,8 +39,8 @@ func TestCheckSixJAndW(t *testing.T) {
 		}
 		a, b, c, d, e, f := h(q[0]), h(q[1]), h(q[2]), h(q[3]), h(q[4]), h(q[5])
 		var value, w rational.Surd
-		panic6j := recovered(func() { value = racah.SixJ(a, b, c, d, e, f) })
-		panicW := recovered(func() { w = racah.W(a, b, e, d, c, f) })
+		panic6j := verify.Recovered(func() { value = racah.SixJ(a, b, c, d, e, f) })
+		panicW := verify.Recovered(func() { w = racah.W(a, b, e, d, c, f) })
 		verdict, err := racah.CheckSixJ(a, b, c, d, e, f)
 		verdictW, errW := racah.CheckW(a, b, e, d, c, f)
 		if bad != (panic6j != nil) || bad != (panicW != nil) || bad != (err != nil) || bad != (errW != nil) {
@@ -133,7 +124,7 @@ func TestVerdictsAndPanics(t *testing.T) {
 			panic(e)
 		},
 	} {
-		if e := recovered(f); e == nil || e.Error() != want {
+		if e := verify.Recovered(f); e == nil || e.Error() != want {
 			t.Errorf("panic %v, want %s", e, want)
 		}
 	}
@@ -172,7 +163,7 @@ func FuzzSixJ(f *testing.F) {
 		}
 		q := [6]int{a, b, c, d, e, f}
 		var value rational.Surd
-		bad := recovered(func() { value = sixJValue(q) })
+		bad := verify.Recovered(func() { value = sixJValue(q) })
 		verdict, err := racah.CheckSixJ(h(a), h(b), h(c), h(d), h(e), h(f))
 		if (bad != nil) != (err != nil) || bad == nil && verdict.Zero() != value.IsZero() {
 			t.Fatalf("%v (halves): %v, panic %v, error %v, verdict %v", q, value, bad, err, verdict)

@@ -6,6 +6,7 @@ import (
 	"testing"
 
 	"example.org/couplet/internal/published"
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/racah"
 	"example.org/couplet/rational"
 )
@@ -102,7 +103,7 @@ func TestNineJFloat(t *testing.T) {
 		t.Errorf("a broken triangle gives %g", f)
 	}
 	want := "racah.NineJFloat: e = -1; allowed: an integer or half-integer >= 0"
-	if e := recovered(func() { racah.NineJFloat(i(1), i(1), i(1), i(1), i(-1), i(1), i(1), i(1), i(1)) }); e == nil || e.Error() != want {
+	if e := verify.Recovered(func() { racah.NineJFloat(i(1), i(1), i(1), i(1), i(-1), i(1), i(1), i(1), i(1)) }); e == nil || e.Error() != want {
 		t.Errorf("panic %v, want %s", e, want)
 	}
 }

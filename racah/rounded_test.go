@@ -6,6 +6,7 @@ import (
 	"testing"
 
 	"example.org/couplet/internal/published"
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/racah"
 	"example.org/couplet/rational"
 	"example.org/couplet/wigner"
@@ -125,10 +126,10 @@ func TestFloatRules(t *testing.T) {
 		}
 		var exact, w rational.Surd
 		var got, gotW float64
-		bad := recovered(func() { exact = racah.SixJ(q[0], q[1], q[2], q[3], q[4], q[5]) })
-		badFloat := recovered(func() { got = racah.SixJFloat(q[0], q[1], q[2], q[3], q[4], q[5]) })
-		recovered(func() { w = racah.W(q[0], q[1], q[2], q[3], q[4], q[5]) })
-		badW := recovered(func() { gotW = racah.WFloat(q[0], q[1], q[2], q[3], q[4], q[5]) })
+		bad := verify.Recovered(func() { exact = racah.SixJ(q[0], q[1], q[2], q[3], q[4], q[5]) })
+		badFloat := verify.Recovered(func() { got = racah.SixJFloat(q[0], q[1], q[2], q[3], q[4], q[5]) })
+		verify.Recovered(func() { w = racah.W(q[0], q[1], q[2], q[3], q[4], q[5]) })
+		badW := verify.Recovered(func() { gotW = racah.WFloat(q[0], q[1], q[2], q[3], q[4], q[5]) })
 		if (bad == nil) != (badFloat == nil) || (bad == nil) != (badW == nil) {
 			t.Fatalf("%v: panics %v, %v, %v", q, bad, badFloat, badW)
 		}

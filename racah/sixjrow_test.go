@@ -7,67 +7,33 @@ import (
 	"testing"
 
 	"example.org/couplet/internal/published"
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/racah"
 	"example.org/couplet/rational"
 )
 
-// rowErrors keeps the largest errors of the members of rows.
-type rowErrors struct {
-	ofLargest, ofMember float64 // relative to the largest member; in ulp of the member
-	members, tiny       int     // compared, and those below 1e-30 of the largest
-}
-
-// The bounds in the doc of SixJRow.
-const (
-	memberBound  = 1.25    // ulp of the member
-	largestBound = 0x1p-60 // of the largest member
-)
-
-// compare takes every step-th member of a row against the correctly rounded symbol.
-func (e *rowErrors) compare(t *testing.T, q [5]int, step int, row []float64) []float64 {
+// compareRow takes every step-th member of a row against the correctly rounded symbol.
+func compareRow(t *testing.T, e *verify.RowErrors, q [5]int, step int, row []float64) []float64 {
 	t.Helper()
 	jmin, row := racah.SixJRow(row, h(q[0]), h(q[1]), h(q[2]), h(q[3]), h(q[4]))
-	largest := 0.0
-	for _, v := range row {
-		largest = max(largest, math.Abs(v))
-	}
-	for i := 0; i < len(row); i += step {
-		j := jmin.Add(rational.Int(i))
-		want := racah.SixJFloat(h(q[0]), h(q[1]), j, h(q[2]), h(q[3]), h(q[4]))
-		d := math.Abs(row[i] - want)
-		e.members++
-		if want != 0 && math.Abs(want) < 1e-30*largest {
-			e.tiny++
-		}
-		ulp := max(math.Nextafter(math.Abs(want), 2)-math.Abs(want), 0x1p-1074)
-		if largest > 0 {
-			e.ofLargest = max(e.ofLargest, d/largest)
-		}
-		if d > largestBound*largest {
-			e.ofMember = max(e.ofMember, d/ulp)
-		}
-		if d > max(memberBound*ulp, largestBound*largest) {
-			t.Fatalf("%v (halves of j1 j2 l1 l2 l3), j = %v: %g, rounded %g, %.2f ulp off", q, j, row[i], want, d/ulp)
-		}
+	if i := e.Compare(row, step, func(i int) float64 {
+		return racah.SixJFloat(h(q[0]), h(q[1]), jmin.Add(rational.Int(i)), h(q[2]), h(q[3]), h(q[4]))
+	}); i >= 0 {
+		t.Fatalf("%v (halves of j1 j2 l1 l2 l3): member %d = %g is %.2f ulp off", q, i, row[i], e.OfMember)
 	}
 	return row
 }
 
-func (e *rowErrors) log(t *testing.T, what string) {
-	t.Helper()
-	t.Logf("%s: %d members, %d below 1e-30 of the largest; errors up to %.2f ulp of the member, 2^%.1f of the largest", what, e.members, e.tiny, e.ofMember, math.Log2(e.ofLargest))
-}
-
 // Every row with the other arguments to 2j = 9, forbidden ones too.
 func TestSixJRowExhaustive(t *testing.T) {
-	var e rowErrors
+	var e verify.RowErrors
 	var row []float64
 	const k = 10
 	for n := range k * k * k * k * k {
-		row = e.compare(t, [5]int{n % k, n / k % k, n / k / k % k, n / k / k / k % k, n / k / k / k / k}, 1, row)
+		row = compareRow(t, &e, [5]int{n % k, n / k % k, n / k / k % k, n / k / k / k % k, n / k / k / k / k}, 1, row)
 	}
-	e.log(t, "2j to 9")
-	if e.ofMember < memberBound/2 || e.members < 100000 {
+	e.Log(t, "2j to 9")
+	if e.OfMember < verify.MemberBound/2 || e.Members < 100000 {
 		t.Error("the bound is far too wide, or the domain too small")
 	}
 }
@@ -77,23 +43,23 @@ func TestSixJRowLarge(t *testing.T) {
 	r := rand.New(rand.NewPCG(26, 26))
 	var row []float64
 	for _, c := range []struct{ size, rows, members int }{{100, 300, 100}, {1000, 80, 12}, {4000, 20, 8}, {20000, 4, 6}, {100000, 2, 3}} {
-		var e rowErrors
-		for e.members < max(4, published.Effort(t, c.rows)*4) {
+		var e verify.RowErrors
+		for e.Members < max(4, published.Effort(t, c.rows)*4) {
 			var q [5]int
 			for i := range q {
 				q[i] = c.size - r.IntN(c.size/2)
 			}
-			switch e.members % 3 { // l3 at one of its limits: a peak next to one end
+			switch e.Members % 3 { // l3 at one of its limits: a peak next to one end
 			case 0:
 				q[4] = max(q[0]-q[3], q[3]-q[0], q[1]-q[2], q[2]-q[1])
 			case 1:
 				q[4] = min(q[0]+q[3], q[1]+q[2])
 			}
 			if triad(q[0], q[3], q[4]) && triad(q[2], q[1], q[4]) {
-				row = e.compare(t, q, c.size/c.members+1, row)
+				row = compareRow(t, &e, q, c.size/c.members+1, row)
 			}
 		}
-		e.log(t, fmt.Sprintf("2j to %d", c.size))
+		e.Log(t, fmt.Sprintf("2j to %d", c.size))
 	}
 }
 
@@ -128,7 +94,7 @@ func TestSixJRowShapes(t *testing.T) {
 		"racah.SixJRow: l2 = -1; allowed: an integer or half-integer >= 0": func() { racah.SixJRow(nil, i(1), i(1), i(1), i(-1), i(1)) },
 		"racah.SixJRow: l3 = 8388609; allowed: at most 8388608 in a row":   func() { racah.SixJRow(nil, i(1), i(1), i(1), i(1), i(1<<23+1)) },
 	} {
-		if e := recovered(f); e == nil || e.Error() != want {
+		if e := verify.Recovered(f); e == nil || e.Error() != want {
 			t.Errorf("panic %v, want %s", e, want)
 		}
 	}
@@ -143,8 +109,8 @@ func FuzzSixJRow(f *testing.F) {
 		if min(a, b, d, e, g) < 0 || max(a, b, d, e, g) > 400 {
 			t.Skip()
 		}
-		var errors rowErrors
-		errors.compare(t, [5]int{a, b, d, e, g}, 1, nil)
+		var found verify.RowErrors
+		compareRow(t, &found, [5]int{a, b, d, e, g}, 1, nil)
 	})
 }
 

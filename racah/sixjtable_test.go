@@ -7,6 +7,7 @@ import (
 	"math"
 	"testing"
 
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/racah"
 	"example.org/couplet/rational"
 )
@@ -62,7 +63,7 @@ func TestSixJTableLimits(t *testing.T) {
 		"racah.SixJTable.At: l1 = 3/2; allowed: at most 1, the limit of the table": func() { table.At(i(1), i(1), i(1), h(3), i(1), i(1)) },
 		"racah.SixJTable.At: j2 = -1; allowed: an integer or half-integer >= 0":    func() { table.At(i(1), i(-1), i(1), i(1), i(1), i(1)) },
 	} {
-		if e := recovered(f); e == nil || e.Error() != want {
+		if e := verify.Recovered(f); e == nil || e.Error() != want {
 			t.Errorf("panic %v, want %s", e, want)
 		}
 	}

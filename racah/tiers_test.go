@@ -9,6 +9,7 @@ import (
 	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/dd"
 	"example.org/couplet/internal/square"
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/rational"
 	"example.org/couplet/wigner"
 )
@@ -107,9 +108,9 @@ func TestFrontErrors(t *testing.T) {
 		mulTriangle(&f, k.d, k.b, k.f, 1)
 		mulTriangle(&f, k.d, k.e, k.c, 1)
 		want := f.SqrtTimes(1).Float(300)
-		worstSmall = max(worstSmall, relative(k.smallFront(&sum), 0, want))
+		worstSmall = max(worstSmall, verify.Relative(k.smallFront(&sum), 0, want))
 		large := k.largeFront()
-		worstLarge = max(worstLarge, relative(large.Pair, large.Exp, want))
+		worstLarge = max(worstLarge, verify.Relative(large.Pair, large.Exp, want))
 	}
 	t.Logf("largest errors: %.1f of %.0f u^2 and %.1f of %.0f u^2", worstSmall*0x1p106, smallError*0x1p106, worstLarge*0x1p106, largeError*0x1p106)
 	if worstSmall > smallError || worstLarge > largeError {
@@ -145,9 +146,9 @@ func TestNineJTiers(t *testing.T) {
 		if !ok {
 			t.Fatalf("%v has no small front", q)
 		}
-		worstSmall = max(worstSmall, relative(small, 0, want))
+		worstSmall = max(worstSmall, verify.Relative(small, 0, want))
 		large := nineJLargeFront(&q)
-		worstLarge = max(worstLarge, relative(large.Pair, large.Exp, want))
+		worstLarge = max(worstLarge, verify.Relative(large.Pair, large.Exp, want))
 		if size > 8 {
 			continue
 		}
@@ -199,14 +200,6 @@ func nineJAllowed(q *square.Array) bool {
 		}
 	}
 	return true
-}
-
-func relative(p dd.Pair, exp int, want *big.Float) float64 {
-	got := new(big.Float).SetPrec(300).SetFloat64(p.Hi)
-	got.Add(got, new(big.Float).SetPrec(300).SetFloat64(p.Lo))
-	got.SetMantExp(got, exp)
-	f, _ := got.Sub(got, want).Quo(got, want).Float64()
-	return math.Abs(f)
 }
 
 // The bound that is proved after the fact holds for rows of 6j symbols, and is not much wider than the error.

@@ -4,20 +4,10 @@ import (
 	"errors"
 	"testing"
 
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/rational"
 	"example.org/couplet/wigner"
 )
-
-// recovered returns the *ArgumentError with which f panics, nil if it does not.
-func recovered(f func()) (e *rational.ArgumentError) {
-	defer func() {
-		if r := recover(); r != nil {
-			e = r.(*rational.ArgumentError)
-		}
-	}()
-	f()
-	return nil
-}
 
 // All arguments with 2j from -1 to 4 and 2m from -5 to 5, allowed or not.
 func TestCheckThreeJ(t *testing.T) {
@@ -29,7 +19,7 @@ func TestCheckThreeJ(t *testing.T) {
 		j := [3]int{digit(6) - 1, digit(6) - 1, digit(6) - 1}
 		m := [3]int{digit(11) - 5, digit(11) - 5, digit(11) - 5}
 		var value rational.Surd
-		panicked := recovered(func() { value = wigner.ThreeJ(h(j[0]), h(j[1]), h(j[2]), h(m[0]), h(m[1]), h(m[2])) })
+		panicked := verify.Recovered(func() { value = wigner.ThreeJ(h(j[0]), h(j[1]), h(j[2]), h(m[0]), h(m[1]), h(m[2])) })
 		verdict, err := wigner.CheckThreeJ(h(j[0]), h(j[1]), h(j[2]), h(m[0]), h(m[1]), h(m[2]))
 		bad, out := false, false
 		for i := range 3 {
@@ -126,7 +116,7 @@ func TestMalformedArguments(t *testing.T) {
 		{"wigner.State.Inner: t = a state of j = 1/2; allowed: a state of j = 1", func() { wigner.Basis(h(2), h(0)).Inner(wigner.Basis(h(1), h(1))) }},
 		{"wigner.State.Amplitude: m = 1/2; allowed: j plus or minus an integer, with j = 1", func() { wigner.Basis(h(2), h(0)).Amplitude(h(1)) }},
 	} {
-		if e := recovered(c.f); e == nil || e.Error() != c.want {
+		if e := verify.Recovered(c.f); e == nil || e.Error() != c.want {
 			t.Errorf("panic %v, want %s", e, c.want)
 		}
 	}

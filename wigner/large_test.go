@@ -6,6 +6,7 @@ import (
 	"math/rand/v2"
 	"testing"
 
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/rational"
 	"example.org/couplet/wigner"
 )
@@ -157,8 +158,8 @@ func FuzzThreeJ(f *testing.F) {
 		}
 		h := rational.Halves
 		var value, swapped rational.Surd
-		bad := recovered(func() { value = wigner.ThreeJ(h(a), h(b), h(c), h(x), h(y), h(z)) })
-		recovered(func() { swapped = wigner.ThreeJ(h(b), h(a), h(c), h(y), h(x), h(z)) })
+		bad := verify.Recovered(func() { value = wigner.ThreeJ(h(a), h(b), h(c), h(x), h(y), h(z)) })
+		verify.Recovered(func() { swapped = wigner.ThreeJ(h(b), h(a), h(c), h(y), h(x), h(z)) })
 		verdict, err := wigner.CheckThreeJ(h(a), h(b), h(c), h(x), h(y), h(z))
 		if (bad != nil) != (err != nil) {
 			t.Fatalf("panic %v, error %v", bad, err)

@@ -4,6 +4,7 @@ import (
 	"slices"
 	"testing"
 
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/rational"
 	"example.org/couplet/wigner"
 )
@@ -62,7 +63,7 @@ func TestOperatorElementOutside(t *testing.T) {
 		t.Errorf("<1 2|J+|1 1> = %v", e)
 	}
 	want := "wigner.Operator.Element: o = Operator(77); allowed: Jx to JSquared"
-	if e := recovered(func() { wigner.Operator(77).Element(h(2), h(2), h(2)) }); e == nil || e.Error() != want {
+	if e := verify.Recovered(func() { wigner.Operator(77).Element(h(2), h(2), h(2)) }); e == nil || e.Error() != want {
 		t.Errorf("panic %v, want %s", e, want)
 	}
 }

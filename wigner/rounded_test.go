@@ -6,6 +6,7 @@ import (
 	"testing"
 
 	"example.org/couplet/internal/published"
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/rational"
 	"example.org/couplet/wigner"
 )
@@ -129,10 +130,10 @@ func TestFloatRules(t *testing.T) {
 		q := [6]rational.Half{h(digit(5) - 1), h(digit(5) - 1), h(digit(5) - 1), h(digit(9) - 4), h(digit(9) - 4), h(digit(9) - 4)}
 		var exact, cg rational.Surd
 		var got, gotCG float64
-		bad := recovered(func() { exact = wigner.ThreeJ(q[0], q[1], q[2], q[3], q[4], q[5]) })
-		badFloat := recovered(func() { got = wigner.ThreeJFloat(q[0], q[1], q[2], q[3], q[4], q[5]) })
-		recovered(func() { cg = wigner.ClebschGordan(q[0], q[3], q[1], q[4], q[2], q[5]) })
-		badCG := recovered(func() { gotCG = wigner.ClebschGordanFloat(q[0], q[3], q[1], q[4], q[2], q[5]) })
+		bad := verify.Recovered(func() { exact = wigner.ThreeJ(q[0], q[1], q[2], q[3], q[4], q[5]) })
+		badFloat := verify.Recovered(func() { got = wigner.ThreeJFloat(q[0], q[1], q[2], q[3], q[4], q[5]) })
+		verify.Recovered(func() { cg = wigner.ClebschGordan(q[0], q[3], q[1], q[4], q[2], q[5]) })
+		badCG := verify.Recovered(func() { gotCG = wigner.ClebschGordanFloat(q[0], q[3], q[1], q[4], q[2], q[5]) })
 		if (bad == nil) != (badFloat == nil) || (bad == nil) != (badCG == nil) {
 			t.Fatalf("%v: panics %v, %v, %v", q, bad, badFloat, badCG)
 		}

@@ -7,71 +7,39 @@ import (
 	"testing"
 
 	"example.org/couplet/internal/published"
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/rational"
 	"example.org/couplet/wigner"
 )
 
-// rowErrors keeps the largest errors of the members of rows, in units of their last place.
-type rowErrors struct {
-	ofLargest, ofMember float64
-	members, tiny       int // compared, and those below 1e-30 of the largest
-}
-
-// The bounds in the doc of ThreeJRow.
-const (
-	memberBound  = 1.25    // ulp of the member
-	largestBound = 0x1p-60 // of the largest member
-)
-
-// compare takes every step-th member of a row against the correctly rounded symbol.
-func (e *rowErrors) compare(t *testing.T, a, x, b, y, step int, row []float64) []float64 {
+// compareRow takes every step-th member of a row against the correctly rounded symbol.
+func compareRow(t *testing.T, e *verify.RowErrors, a, x, b, y, step int, row []float64) []float64 {
 	t.Helper()
 	h := rational.Halves
 	jmin, row := wigner.ThreeJRow(row, h(a), h(x), h(b), h(y))
-	largest := 0.0
-	for _, v := range row {
-		largest = max(largest, math.Abs(v))
-	}
-	for i := 0; i < len(row); i += step {
-		j := jmin.Add(rational.Int(i))
-		want := wigner.ThreeJFloat(h(a), h(b), j, h(x), h(y), h(-x-y))
-		d := math.Abs(row[i] - want)
-		e.members++
-		if want != 0 && math.Abs(want) < 1e-30*largest {
-			e.tiny++
-		}
-		ulp := max(math.Nextafter(math.Abs(want), 2)-math.Abs(want), 0x1p-1074)
-		e.ofLargest = max(e.ofLargest, d/largest)
-		if d > largestBound*largest {
-			e.ofMember = max(e.ofMember, d/ulp)
-		}
-		if d > max(memberBound*ulp, largestBound*largest) {
-			t.Fatalf("2j1, 2m1, 2j2, 2m2 = %d %d %d %d, j = %v: %g, rounded %g, %.2f ulp off", a, x, b, y, j, row[i], want, d/ulp)
-		}
+	if i := e.Compare(row, step, func(i int) float64 {
+		return wigner.ThreeJFloat(h(a), h(b), jmin.Add(rational.Int(i)), h(x), h(y), h(-x-y))
+	}); i >= 0 {
+		t.Fatalf("2j1, 2m1, 2j2, 2m2 = %d %d %d %d: member %d = %g is %.2f ulp off", a, x, b, y, i, row[i], e.OfMember)
 	}
 	return row
 }
 
-func (e *rowErrors) log(t *testing.T, what string) {
-	t.Helper()
-	t.Logf("%s: %d members, %d below 1e-30 of the largest; errors up to %.2f ulp of the member, 2^%.1f of the largest", what, e.members, e.tiny, e.ofMember, math.Log2(e.ofLargest))
-}
-
 // Every row with 2j to 14.
 func TestThreeJRowExhaustive(t *testing.T) {
-	var e rowErrors
+	var e verify.RowErrors
 	var row []float64
 	for a := range 15 {
 		for b := range 15 {
 			for x := -a; x <= a; x += 2 {
 				for y := -b; y <= b; y += 2 {
-					row = e.compare(t, a, x, b, y, 1, row)
+					row = compareRow(t, &e, a, x, b, y, 1, row)
 				}
 			}
 		}
 	}
-	e.log(t, "2j to 14")
-	if e.ofMember < memberBound/2 {
+	e.Log(t, "2j to 14")
+	if e.OfMember < verify.MemberBound/2 {
 		t.Error("the bound is far too wide")
 	}
 }
@@ -81,7 +49,7 @@ func TestThreeJRowLarge(t *testing.T) {
 	r := rand.New(rand.NewPCG(25, 25))
 	var row []float64
 	for _, c := range []struct{ size, rows, members int }{{100, 100, 1000}, {1000, 40, 60}, {2000, 20, 60}, {20000, 4, 12}, {100000, 4, 8}} {
-		var e rowErrors
+		var e verify.RowErrors
 		for k := range max(2, published.Effort(t, c.rows)) {
 			a, b := c.size-r.IntN(c.size/2), c.size-r.IntN(c.size/2)
 			x, y := a-2*r.IntN(a+1), b-2*r.IntN(b+1)
@@ -93,9 +61,9 @@ func TestThreeJRowLarge(t *testing.T) {
 			case 2: // a peak next to one end
 				x, y = a-2*r.IntN(3), 2*r.IntN(3)-b
 			}
-			row = e.compare(t, a, x, b, y, c.size/c.members+1, row)
+			row = compareRow(t, &e, a, x, b, y, c.size/c.members+1, row)
 		}
-		e.log(t, fmt.Sprintf("2j to %d", c.size))
+		e.Log(t, fmt.Sprintf("2j to %d", c.size))
 	}
 }
 
@@ -138,7 +106,7 @@ func TestThreeJRowShapes(t *testing.T) {
 		"wigner.ThreeJRow: m1 = 1/2; allowed: j1 plus or minus an integer, with j1 = 1": func() { wigner.ThreeJRow(nil, i(1), h(1), i(1), i(0)) },
 		"wigner.ThreeJRow: j1 = 16777217/2; allowed: at most 8388608 in a row":          func() { wigner.ThreeJRow(nil, h(1<<24+1), h(1), i(1), i(0)) },
 	} {
-		if e := recovered(f); e == nil || e.Error() != want {
+		if e := verify.Recovered(f); e == nil || e.Error() != want {
 			t.Errorf("panic %v, want %s", e, want)
 		}
 	}
@@ -154,8 +122,8 @@ func FuzzThreeJRow(f *testing.F) {
 		if a < 0 || b < 0 || a > 600 || b > 600 || x > a || -x > a || y > b || -y > b || (a-x)&1 != 0 || (b-y)&1 != 0 {
 			t.Skip()
 		}
-		var e rowErrors
-		e.compare(t, a, x, b, y, 1, nil)
+		var e verify.RowErrors
+		compareRow(t, &e, a, x, b, y, 1, nil)
 	})
 }
 

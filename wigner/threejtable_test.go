@@ -6,6 +6,7 @@ import (
 	"fmt"
 	"testing"
 
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/rational"
 	"example.org/couplet/wigner"
 )
@@ -87,7 +88,7 @@ func TestThreeJTableLimits(t *testing.T) {
 		"wigner.ThreeJTable.At: j1 = -1; allowed: an integer or half-integer >= 0":           func() { table.At(i(-1), i(1), i(1), i(0), i(0), i(0)) },
 		"wigner.ThreeJTable.At: m3 = 1/2; allowed: j3 plus or minus an integer, with j3 = 1": func() { table.At(i(1), i(1), i(1), i(0), i(0), h(1)) },
 	} {
-		if e := recovered(f); e == nil || e.Error() != want {
+		if e := verify.Recovered(f); e == nil || e.Error() != want {
 			t.Errorf("panic %v, want %s", e, want)
 		}
 	}

@@ -7,6 +7,7 @@ import (
 	"testing"
 
 	"example.org/couplet/internal/dd"
+	"example.org/couplet/internal/verify"
 	"example.org/couplet/rational"
 )
 
@@ -87,10 +88,10 @@ func TestFrontErrors(t *testing.T) {
 				f.MulInt(q.twiceJ3()+1, 1)
 			}
 			want := f.SqrtTimes(1).Float(300)
-			worstSmall = max(worstSmall, relative(q.smallFront(coefficient), 0, want))
+			worstSmall = max(worstSmall, verify.Relative(q.smallFront(coefficient), 0, want))
 			if !coefficient {
 				large := q.largeFront()
-				worstLarge = max(worstLarge, relative(large.Pair, large.Exp, want))
+				worstLarge = max(worstLarge, verify.Relative(large.Pair, large.Exp, want))
 			}
 		}
 	}
@@ -108,14 +109,6 @@ func b2i(b bool) int {
 		return 1
 	}
 	return 0
-}
-
-func relative(p dd.Pair, exp int, want *big.Float) float64 {
-	got := new(big.Float).SetPrec(300).SetFloat64(p.Hi)
-	got.Add(got, new(big.Float).SetPrec(300).SetFloat64(p.Lo))
-	got.SetMantExp(got, exp)
-	f, _ := got.Sub(got, want).Quo(got, want).Float64()
-	return math.Abs(f)
 }
 
 // The route by rows, forced on small symbols and large ones, gives the bits of the routes by sums where it
