@@ -251,7 +251,7 @@ func TestRowError(t *testing.T) {
 	}
 }
 
-// A solution with an admixture of a neighboring eigenvector, l3-1 or l3+1, which the residue must show
+// A solution with an admixture of a neighboring eigenvector, l3-1 or l3+1, which the residual must show
 // through the gap: the bound is the admixture at least, and for the nearer of the two not much more.
 func TestRowErrorOfAdmixture(t *testing.T) {
 	const admixture = 0x1p-40

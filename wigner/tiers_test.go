@@ -194,7 +194,7 @@ func TestRowError(t *testing.T) {
 	}
 }
 
-// A solution with an admixture of the neighboring eigenvector, which the residue must show through the gap:
+// A solution with an admixture of the neighboring eigenvector, which the residual must show through the gap:
 // the bound is the admixture, neither less nor much more.
 func TestRowErrorOfAdmixture(t *testing.T) {
 	const admixture = 0x1p-40

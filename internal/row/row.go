@@ -190,17 +190,17 @@ func (r *Recurrence) advance(e *end, x, low []float64) {
 // which is proved after the fact. Divided by 2(J+1) J(J+2) the recurrence says that the vector with the
 // members sqrt(2j+1) x(j) is the eigenvector of a symmetric tridiagonal matrix to the eigenvalue that is part
 // of C1. The other eigenvalues are at the distance gap or more. Then what is orthogonal to the eigenvector in
-// a vector of length 1 is at most the length of its residue, divided by gap.
+// a vector of length 1 is at most the length of its residual, divided by gap.
 //
-// The residue is computed here, in double-double. With an error of 40 u^2 in each of its three terms, which
+// The residual is computed here, in double-double. With an error of 40 u^2 in each of its three terms, which
 // leaves room for that of l(J) with its root and up to four factors, below 15 u^2, of d(J), below 15 u^2, and
 // of products and sums, and with 4 u^2 for each term in the sum that normalizes the vector, the bound is safe.
 // Members that have been lost by underflow are below 2^-500 of the largest.
 func (r *Recurrence) Error(x, low []float64, w, gap float64) float64 {
 	const uu = 0x1p-106
 	n := len(x)
-	residue, size := 0.0, 0.0 // sums of squares
-	link := dd.Pair{}         // between i-1 and i
+	residual, size := 0.0, 0.0 // sums of squares
+	link := dd.Pair{}          // between i-1 and i
 	for i := range n {
 		J := r.twice(i)
 		here := dd.Pair{Hi: x[i], Lo: low[i]}
@@ -224,10 +224,10 @@ func (r *Recurrence) Error(x, low []float64, w, gap float64) float64 {
 		scale := 1 / (2 * (J + 1) * (J + 2) * factor)
 		weight := w * (J + 1)
 		sum.Hi, magnitude = float64(sum.Hi*scale), float64(magnitude*scale)
-		residue += float64(weight * sum.Hi * sum.Hi)
+		residual += float64(weight * sum.Hi * sum.Hi)
 		size += float64(weight * magnitude * magnitude)
 	}
-	length := math.Sqrt(residue) + float64(40*uu*math.Sqrt(size))
+	length := math.Sqrt(residual) + float64(40*uu*math.Sqrt(size))
 	return float64(1.01*length/gap) + float64(float64(n+20)*4*uu) // 1.01 for the roundings here and the second order
 }
 

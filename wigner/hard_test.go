@@ -1,0 +1,90 @@
+package wigner
+
+import (
+	"flag"
+	"fmt"
+	"math/rand/v2"
+	"os"
+	"path/filepath"
+	"strings"
+	"testing"
+
+	"example.org/couplet/internal/dd"
+	"example.org/couplet/internal/published"
+	"example.org/couplet/internal/verify"
+	"example.org/couplet/rational"
+)
+
+var search = flag.Int("search", 0, "search so many random symbols for hard cases, and rewrite testdata/hard/threej.csv")
+
+const hardHead = `# 3j symbols that lie close to a boundary of rounding: to the middle of two float64 numbers, or to one of them.
+# Found by go test ./wigner -run HardCases -search %d: random symbols with j1+j2+j3 from 20 to 150, seed 30, by
+# the double-double value before rounding; the closest ones are kept. Arguments are twice their values.
+# bits is how many bits after the 53 of the float64, and the one that decides, are alike; value is the correctly
+# rounded one, by the exact route.
+j1,j2,j3,m1,m2,m3,bits,value
+`
+
+// Symbols close to a boundary of rounding, searched for on purpose.
+func TestHardCases(t *testing.T) {
+	if *search > 0 {
+		searchHardCases(t, *search)
+	}
+	rows := published.Rows(t, "hard", "threej.csv")
+	for _, row := range rows {
+		var j [6]rational.Half
+		for i, column := range []string{"j1", "j2", "j3", "m1", "m2", "m3"} {
+			j[i] = rational.Halves(row.Half(column).Twice() / 2) // the columns are twice the values
+		}
+		exact := ThreeJ(j[0], j[1], j[2], j[3], j[4], j[5])
+		got := ThreeJFloat(j[0], j[1], j[2], j[3], j[4], j[5])
+		if want := fmt.Sprintf("%x", exact.Float64()); fmt.Sprintf("%x", got) != want || row.Text("value") != want {
+			t.Errorf("%v: %x, exact %s", row, got, want)
+		}
+		if bits := verify.AlikeBits(exact.Float(300)); fmt.Sprint(bits) != row.Text("bits") {
+			t.Errorf("%v: %d bits alike", row, bits)
+		}
+	}
+	if len(rows) != 40 {
+		t.Errorf("%d cases", len(rows))
+	}
+}
+
+func searchHardCases(t *testing.T, draws int) {
+	r := rand.New(rand.NewPCG(30, 30))
+	var found verify.Hardest
+	for range draws {
+		total := 20 + r.IntN(131)
+		a, b := r.IntN(total/2+1), r.IntN(total/2+1)
+		c, d := r.IntN(total+1), r.IntN(total+1)
+		q := regge{a, b, total - a - b, c, d, total - c - d, total - a - c, total - b - d, a + b + c + d - total}
+		if min(q[2], q[5], q[6], q[7], q[8]) < 0 {
+			continue
+		}
+		front := q.smallFront(false)
+		if front.Hi < 0x1p-126 {
+			continue
+		}
+		sum := q.sum()
+		if s := dd.FromMod128(sum.Mod128()); s.Hi != 0 {
+			p := front.Mul(s).Normal()
+			if h := verify.Hardness(p); found.Wants(h) {
+				found.Add(h, fmt.Sprintf("%d,%d,%d,%d,%d,%d", q[3]+q[6], q[4]+q[7], q[5]+q[8], q[6]-q[3], q[7]-q[4], q[8]-q[5]))
+			}
+		}
+	}
+	var out strings.Builder
+	fmt.Fprintf(&out, hardHead, draws)
+	for _, text := range found.Texts() {
+		var q [6]int
+		if _, err := fmt.Sscanf(text, "%d,%d,%d,%d,%d,%d", &q[0], &q[1], &q[2], &q[3], &q[4], &q[5]); err != nil {
+			t.Fatal(err)
+		}
+		h := rational.Halves
+		exact := ThreeJ(h(q[0]), h(q[1]), h(q[2]), h(q[3]), h(q[4]), h(q[5]))
+		fmt.Fprintf(&out, "%s,%d,%x\n", text, verify.AlikeBits(exact.Float(300)), exact.Float64())
+	}
+	if err := os.WriteFile(filepath.Join(published.Root(t), "testdata", "hard", "threej.csv"), []byte(out.String()), 0o644); err != nil {
+		t.Fatal(err)
+	}
+}
