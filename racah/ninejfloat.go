@@ -3,7 +3,9 @@ package racah
 import (
 	"math"
 	"math/big"
+	"slices"
 
+	"example.org/couplet/internal/argument"
 	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/dd"
 	"example.org/couplet/internal/row"
@@ -13,8 +15,8 @@ import (
 
 // NineJFloat returns the float64 nearest to the 9j symbol of [NineJ], to even on a tie, whatever its size.
 // Zeros and panics are those of NineJ. Nearly always it allocates nothing while every argument is at most 100,
-// and time grows like the size; where the value is too close to a rounding boundary, or an accidental zero, it
-// takes the sum of [NineJ] in full.
+// and time grows like the size; where the value is too close to a rounding boundary, or an accidental zero, or
+// an argument above 2^23, it takes the sum of [NineJ] in full.
 func NineJFloat(a, b, c, d, e, f, g, h, i rational.Half) float64 {
 	t, ok := nineJArray(a, b, c, d, e, f, g, h, i)
 	if !ok {
@@ -148,6 +150,9 @@ const rowMembers = 201
 // Schwarz's inequality bounds what the error of p adds by e/sqrt(w) sqrt(Σ (2x+1) q^2 r^2), and for q and r
 // alike. The roundings of a term and of the sums add 40 u^2 + 2n u^2 of Σ (2x+1) |pqr| at the most.
 func nineJByRows(t *square.Array) (f float64, ok bool) {
+	if slices.Max(t[:]) > argument.MostInRow {
+		return 0, false
+	}
 	a, b, c, d, e, ff, g, h, i := t[0], t[1], t[2], t[3], t[4], t[5], t[6], t[7], t[8]
 	// { a b c; f i x } = { a i x; f b c }, { d e f; b x h } = { b f x; d h e }, { g h i; x a d } = { a i x; h d g }
 	arguments := [3][5]int{{a, i, ff, b, c}, {b, ff, d, h, e}, {a, i, h, d, g}}
@@ -194,6 +199,9 @@ func nineJByRows(t *square.Array) (f float64, ok bool) {
 
 // nineJManyWords is the route for sums of any length.
 func nineJManyWords(t *square.Array) (f float64, ok bool) {
+	if nineJTop(t) > dd.MostFactorials {
+		return 0, false
+	}
 	image, negative := nineJShortest(t)
 	z := nineJSum(new(big.Int), &image)
 	if z.Sign() == 0 {
@@ -204,15 +212,20 @@ func nineJManyWords(t *square.Array) (f float64, ok bool) {
 	return nineJLargeFront(t).Mul(s).Round(largeError)
 }
 
-// nineJLargeFront returns the same front from factorials: 24 factors with an error of u^2, and 24
-// multiplications, that of the sum among them, with 5 u^2. With 2 for the sum and 2 for the rounding that is
-// below 2^8 u^2 = 2^-98.
-func nineJLargeFront(t *square.Array) dd.Scaled {
+// nineJTop returns the largest number whose factorial is in the symbol.
+func nineJTop(t *square.Array) int {
 	top := 0
 	for _, p := range &nineJTriads {
 		top = max(top, (t[p[0]]+t[p[1]]+t[p[2]])/2+1)
 	}
-	table := dd.Factorials(top)
+	return top
+}
+
+// nineJLargeFront returns the same front from factorials: 24 factors with an error of u^2, and 24
+// multiplications, that of the sum among them, with 5 u^2. With 2 for the sum and 2 for the rounding that is
+// below 2^8 u^2 = 2^-98.
+func nineJLargeFront(t *square.Array) dd.Scaled {
+	table := dd.Factorials(nineJTop(t))
 	z := dd.Scaled{Pair: dd.Pair{Hi: 1}}
 	for _, p := range &nineJTriads {
 		x, y, w := t[p[0]], t[p[1]], t[p[2]]

@@ -93,6 +93,9 @@ func (k *tetrad) fewWords(sum *binsum.Quadruple, negative bool) (f float64, ok b
 }
 
 func (k *tetrad) manyWords(sum *binsum.Quadruple, negative bool) (f float64, ok bool) {
+	if k.top() > dd.MostFactorials {
+		return 0, false
+	}
 	words := sum.Sum()
 	high, low, exp, sign := words.Leading()
 	if high == 0 {
@@ -122,12 +125,16 @@ func delta(d *dd.Binomials, j, x, y int) dd.Pair {
 	return d.InverseNext[dd.Place(j, j-x)].Mul(d.Inverse[dd.Place(x, j-y)])
 }
 
+// top returns the largest number whose factorial is in the symbol.
+func (k *tetrad) top() int {
+	return max(k.a+k.b+k.c, k.a+k.e+k.f, k.d+k.b+k.f, k.d+k.e+k.c)/2 + 1
+}
+
 // largeFront returns the same front from factorials: sixteen factors with an error of u^2, and sixteen
 // multiplications, that of the sum among them, with 5 u^2. With 2 for the sum and 2 for the rounding
 // that is below 2^7 u^2 = 2^-99.
 func (k *tetrad) largeFront() dd.Scaled {
-	top := max(k.a+k.b+k.c, k.a+k.e+k.f, k.d+k.b+k.f, k.d+k.e+k.c)/2 + 1
-	t := dd.Factorials(top)
+	t := dd.Factorials(k.top())
 	z := dd.Scaled{Pair: dd.Pair{Hi: 1}}
 	triangle := func(up, down []dd.Scaled, x, y, w int) {
 		z = z.Mul(up[(x+y-w)/2]).Mul(up[(y+w-x)/2]).Mul(up[(w+x-y)/2]).Mul(down[(x+y+w)/2+1])

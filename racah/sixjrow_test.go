@@ -3,6 +3,7 @@ package racah_test
 import (
 	"fmt"
 	"math"
+	"math/big"
 	"math/rand/v2"
 	"testing"
 
@@ -36,6 +37,54 @@ func TestSixJRowExhaustive(t *testing.T) {
 	if e.OfMember < verify.MemberBound/2 || e.Members < 100000 {
 		t.Error("the bound is far too wide, or the domain too small")
 	}
+}
+
+// Rows up to their limit, and single symbols beyond it, with so many small arguments that the exact symbols
+// are at hand.
+func TestSixJRowLimit(t *testing.T) {
+	var e verify.RowErrors
+	for _, b := range []int{1<<18 + 2, 1<<19 + 2, 1<<21 + 2, 1<<23 + 2, 1<<24 - 6, 1<<24 + 2} {
+		for _, q := range [][5]int{{6, b, 4, b + 2, b}, {5, b + 1, 4, b, b + 3}, {b, b, b, b, 6}} {
+			jmin := max(q[0]-q[1], q[1]-q[0], q[2]-q[3], q[3]-q[2])
+			exact := func(i int) float64 {
+				return racah.SixJ(h(q[0]), h(q[1]), h(jmin+2*i), h(q[2]), h(q[3]), h(q[4])).Float64()
+			}
+			for i := range 4 {
+				if got := racah.SixJFloat(h(q[0]), h(q[1]), h(jmin+2*i), h(q[2]), h(q[3]), h(q[4])); got != exact(i) {
+					t.Errorf("%v (halves of j1 j2 l1 l2 l3), member %d = %g, want %g", q, i, got, exact(i))
+				}
+			}
+			if b > 1<<24 {
+				continue
+			}
+			_, row := racah.SixJRow(nil, h(q[0]), h(q[1]), h(q[2]), h(q[3]), h(q[4]))
+			if i := e.Compare(row[:min(len(row), 40)], 1, exact); i >= 0 {
+				t.Errorf("%v (halves of j1 j2 l1 l2 l3): member %d = %g, want %g", q, i, row[i], exact(i))
+			}
+		}
+		if b > 1<<24 {
+			continue
+		}
+		// By DLMF (34.6.2), from exact 6j symbols.
+		q := [9]int{4, b, b + 2, 6, b - 2, b, 2, b, b}
+		want := new(big.Float).SetPrec(300)
+		for x := b - 4; x <= b+4; x += 2 {
+			term := racah.SixJ(h(q[0]), h(q[3]), h(q[6]), h(q[7]), h(q[8]), h(x)).
+				Mul(racah.SixJ(h(q[1]), h(q[4]), h(q[7]), h(q[3]), h(x), h(q[5]))).
+				Mul(racah.SixJ(h(q[2]), h(q[5]), h(q[8]), h(x), h(q[0]), h(q[1]))).Float(300)
+			term.Mul(term, new(big.Float).SetInt64(int64(x+1)))
+			if x&1 != 0 {
+				term.Neg(term)
+			}
+			want.Add(want, term)
+		}
+		nearest, _ := want.Float64()
+		got := racah.NineJFloat(h(q[0]), h(q[1]), h(q[2]), h(q[3]), h(q[4]), h(q[5]), h(q[6]), h(q[7]), h(q[8]))
+		if got != nearest || got == 0 {
+			t.Errorf("halves of %v: %g, want %g", q, got, nearest)
+		}
+	}
+	e.Log(t, "2j to 2^24")
 }
 
 // Random rows up to 2j = 100000.

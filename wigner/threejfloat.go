@@ -3,6 +3,7 @@ package wigner
 import (
 	"sync/atomic"
 
+	"example.org/couplet/internal/argument"
 	"example.org/couplet/internal/dd"
 	"example.org/couplet/rational"
 )
@@ -56,7 +57,7 @@ func (r *regge) float(coefficient bool) float64 {
 		f, ok = r.oneWord(coefficient)
 	} else if total < dd.BinomialTops {
 		f, ok = r.twoWords(coefficient)
-	} else if total > rowTotal {
+	} else if total > rowTotal && total <= argument.MostInRow { // no 2j exceeds J
 		f, ok = r.byRow(coefficient)
 	}
 	if !ok {
@@ -97,6 +98,9 @@ func (r *regge) twoWords(coefficient bool) (f float64, ok bool) {
 }
 
 func (r *regge) manyWords(coefficient bool) (f float64, ok bool) {
+	if r.total() >= dd.MostFactorials {
+		return 0, false
+	}
 	image := r.shortest()
 	sum := image.sum()
 	words := sum.Sum()

@@ -67,6 +67,34 @@ func TestThreeJRowLarge(t *testing.T) {
 	}
 }
 
+// Up to the limit of a row and, for single values, beyond it, with a j so small that the exact symbols are at
+// hand. The double-double sums, the rows and the exact route each have a size here.
+func TestThreeJRowLimit(t *testing.T) {
+	h := rational.Halves
+	var e verify.RowErrors
+	for _, b := range []int{1<<18 + 2, 1<<19 + 2, 1<<21 + 2, 1<<23 + 2, 1<<24 - 1, 1 << 24, 1<<24 + 2, 1<<26 + 1} {
+		for _, s := range []struct{ a, x, y int }{{6, 2, b/3*2 - b}, {1, -1, b}, {6, 0, b & 1}, {9, 3, b - 8}} {
+			exact := func(j rational.Half) float64 {
+				return wigner.ThreeJ(h(s.a), h(b), j, h(s.x), h(s.y), h(-s.x-s.y)).Float64()
+			}
+			for j := max(b-s.a, s.x+s.y, -s.x-s.y); j <= b+s.a; j += 2 {
+				got, want := wigner.ThreeJFloat(h(s.a), h(b), h(j), h(s.x), h(s.y), h(-s.x-s.y)), exact(h(j))
+				if got != want {
+					t.Errorf("(%d %d %d; %d %d)/2 = %g, want %g", s.a, b, j, s.x, s.y, got, want)
+				}
+			}
+			if b > 1<<24 {
+				continue
+			}
+			jmin, row := wigner.ThreeJRow(nil, h(s.a), h(s.x), h(b), h(s.y))
+			if i := e.Compare(row, 1, func(i int) float64 { return exact(jmin.Add(rational.Int(i))) }); i >= 0 {
+				t.Errorf("(%d %d j; %d %d)/2: member %d = %g", s.a, b, s.x, s.y, i, row[i])
+			}
+		}
+	}
+	e.Log(t, "2j to 2^24")
+}
+
 // A single member; none; a zero in every second place; the slice that comes back; whole rows by
 // DLMF (34.3.17), with m1 = m1' and m2 = m2'.
 func TestThreeJRowShapes(t *testing.T) {

@@ -25,10 +25,12 @@ func Projection(fn, jName, mName string, j, m rational.Half) *rational.ArgumentE
 	return nil
 }
 
-// RowLimit returns an error unless the momentum of a row is at most 2^23: up to there all integers of the
-// recurrences are exact in a float64.
+// MostInRow is the largest 2j of a row: up to there all integers of the recurrences are exact in a float64.
+const MostInRow = 1 << 24
+
+// RowLimit returns an error unless the momentum of a row is at most MostInRow/2.
 func RowLimit(fn, name string, j rational.Half) *rational.ArgumentError {
-	if j.Twice() > 1<<24 {
+	if j.Twice() > MostInRow {
 		return &rational.ArgumentError{Func: fn, Arg: name, Value: j.String(), Allowed: "at most 8388608 in a row"}
 	}
 	return nil

@@ -29,7 +29,10 @@ var (
 	rootsMutex sync.Mutex
 )
 
-// Factorials returns a table for all n up to top, perhaps more. It is built when first asked for, and
+// MostFactorials is how far Factorials reaches: beyond, the table would take more than 100 MB.
+const MostFactorials = 1 << 20
+
+// Factorials returns a table for all n up to top <= MostFactorials, perhaps more. It is built when first asked for, and
 // again where a larger one is asked for; the slices are never changed.
 func Factorials(top int) *Roots {
 	if t := roots.Load(); t != nil && len(t.Root) > top {
@@ -41,7 +44,7 @@ func Factorials(top int) *Roots {
 	if t == nil {
 		t = newRoots(max(top, 1<<9))
 	} else if len(t.Root) <= top {
-		t = newRoots(max(top, 2*len(t.Root))) // doubling keeps the total work linear
+		t = newRoots(max(top, min(2*len(t.Root), MostFactorials))) // doubling keeps the total work linear
 	}
 	roots.Store(t)
 	return t

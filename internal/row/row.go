@@ -14,7 +14,7 @@ import (
 //	l(J) = sqrt[ Π |J^2 - D^2| ]
 //	d(J) = -2 (J+1) [ C0 + C1 J(J+2) + C2 J^2(J+2)^2 ]
 //
-// with the product over the first N of the D. Every D is an integer below 2^25, so that all that is written
+// with the product over the first N of the D. Every D is an integer below 2^26, so that all that is written
 // with J and D is exact in a float64; the C are integers, in normal form. Where J can be 0, C0 is 0: the
 // whole recurrence has a factor J there, which is taken out.
 type Recurrence struct {
