@@ -60,17 +60,14 @@ func SixJRow(dst []float64, j1, j2, l1, l2, l3 rational.Half) (jmin rational.Hal
 //
 //	1/16 [ J^2(J+2)^2 + (2F - A - B - D - E) J(J+2) + (A-B)(E-D) ]
 func newSixJRow(a, b, d, e, f int) (r row.Recurrence, n int, negative bool) {
-	square := func(n int) int64 { return int64(n) * int64(n+2) }
-	ab, ed := float64(square(a)-square(b)), float64(square(e)-square(d))
+	casimir := func(n int) int64 { return int64(n) * int64(n+2) }
+	square := func(n int) float64 { return float64(int64(n) * int64(n)) }
+	ab, ed := float64(casimir(a)-casimir(b)), float64(casimir(e)-casimir(d))
 	r = row.Recurrence{
 		First: max(distance(a, b), distance(d, e)),
-		D:     [4]float64{float64(a - b), float64(a + b + 2), float64(d - e), float64(d + e + 2)},
-		N:     4,
-		C: [3]dd.Pair{
-			dd.Pair{Hi: ab}.Mul(dd.Pair{Hi: ed}), // exact
-			{Hi: float64(2*square(f) - square(a) - square(b) - square(d) - square(e))},
-			{Hi: 1},
-		},
+		A:     square(a - b), B: square(a + b + 2), C: square(d - e), D: square(d + e + 2), E: 1,
+		C0: dd.Pair{Hi: ab}.Mul(dd.Pair{Hi: ed}), // exact
+		C1: float64(2*casimir(f) - casimir(a) - casimir(b) - casimir(d) - casimir(e)),
 	}
 	return r, (min(a+b, d+e)-r.First)/2 + 1, (a+b+d+e)&2 != 0
 }

@@ -50,16 +50,14 @@ func ThreeJRow(dst []float64, j1, m1, j2, m2 rational.Half) (jmin rational.Half,
 //	l(2j) = 8 sqrt[ (j^2-(j1-j2)^2) ((j1+j2+1)^2-j^2) (j^2-m^2) ]
 //	d(2j) = -16 (2j+1) { [j1(j1+1) - j2(j2+1)] m - j(j+1) (m2-m1) }
 func newThreeJRow(a, x, b, y int) (r row.Recurrence, n int, negative bool) {
-	square := func(n int) int64 { return int64(n) * int64(n+2) }
-	ba, m := float64(square(b)-square(a)), float64(x+y)
+	casimir := func(n int) int64 { return int64(n) * int64(n+2) }
+	square := func(n int) float64 { return float64(int64(n) * int64(n)) }
+	ba, m := float64(casimir(b)-casimir(a)), float64(x+y)
 	r = row.Recurrence{
 		First: max(a-b, b-a, x+y, -x-y),
-		D:     [4]float64{float64(a - b), float64(a + b + 2), m},
-		N:     3,
-		C: [3]dd.Pair{
-			dd.Pair{Hi: ba}.Mul(dd.Pair{Hi: m}), // exact
-			{Hi: float64(x - y)},
-		},
+		A:     square(a - b), B: square(a + b + 2), C: square(x + y), D: 1,
+		C0: dd.Pair{Hi: ba}.Mul(dd.Pair{Hi: m}), // exact
+		C1: float64(x - y),
 	}
 	return r, (a+b-r.First)/2 + 1, (a-b+x+y)&2 != 0
 }

@@ -11,45 +11,41 @@ import (
 // Recurrence is that of the 3j symbols and of the 6j symbols x(j) in one momentum j,
 //
 //	J l(J+2) x(j+1) + d(J) x(j) + (J+2) l(J) x(j-1) = 0,    J = 2j
-//	l(J) = sqrt[ Π |J^2 - D^2| ]
-//	d(J) = -2 (J+1) [ C0 + C1 J(J+2) + C2 J^2(J+2)^2 ]
+//	l(J) = sqrt[ (J^2-A) (B-J^2) (J^2-C) (D - E J^2) ]
+//	d(J) = -2 (J+1) [ C0 + C1 J(J+2) + E J^2(J+2)^2 ]
 //
-// with the product over the first N of the D. Every D is an integer below 2^26, so that all that is written
-// with J and D is exact in a float64; the C are integers, in normal form. Where J can be 0, C0 is 0: the
-// whole recurrence has a factor J there, which is taken out.
+// E is 0 for 3j symbols and 1 for 6j symbols. All of these are integers. A to D, C1 and what is added up with
+// them is below 2^53 and so exact in a float64; C0 and the bracket in d(J) are exact in two. Where J can be 0,
+// C0 is 0: the whole recurrence has a factor J there, which is taken out.
 type Recurrence struct {
-	First int // J of the first member
-	D     [4]float64
-	N     int
-	C     [3]dd.Pair
+	First      int // J of the first member
+	A, B, C, D float64
+	E          float64
+	C0         dd.Pair
+	C1         float64
 }
 
-// links returns l(J) and 1/(w l(J)), of which one division is enough for both.
-func (r *Recurrence) links(J, w float64) (link, inverse dd.Pair) {
-	p := dd.Pair{Hi: math.Abs(float64((J - r.D[0]) * (J + r.D[0])))}
-	for _, d := range r.D[1:r.N] {
-		p = times(p, math.Abs(float64((J-d)*(J+d))))
-	}
-	q := math.Sqrt(p.Hi)
-	v := 1 / (w * q)
-	rest := math.FMA(-q, q, p.Hi) + p.Lo
-	link = dd.Pair{Hi: q, Lo: float64(rest * (0.5 * (v * w)))}
-	t := times(link, w)
-	e := math.FMA(-t.Lo, v, math.FMA(-t.Hi, v, 1))
-	return link, dd.Pair{Hi: v, Lo: float64(v * e)}
+// link returns l(J), normal or nearly so, with an error below 6 u^2.
+func (r *Recurrence) link(J float64) dd.Pair {
+	jj := float64(J * J)
+	a, b, c, d := jj-r.A, r.B-jj, jj-r.C, r.D-float64(r.E*jj)
+	p, q := float64(a*b), float64(c*d)
+	s := float64(p * q)
+	rest := math.FMA(p, q, -s) + math.FMA(p, math.FMA(c, d, -q), float64(math.FMA(a, b, -p)*q))
+	root := math.Sqrt(s)
+	return dd.Pair{Hi: root, Lo: float64((math.FMA(-root, root, s) + rest) * (0.5 / root))}
 }
 
-// diagonal returns d(J), for J = 0 without its factor J.
+// diagonal returns d(J), for J = 0 without its factor J, with an error below 2 u^2. The bracket is an
+// integer that Normal leaves exact, whatever cancels in it.
 func (r *Recurrence) diagonal(J float64) dd.Pair {
 	jj := float64(J * (J + 2))
-	v := r.C[1]
-	if r.C[2].Hi != 0 {
-		v = add(v, times(r.C[2], jj))
-	}
+	c := r.C1 + float64(r.E*jj)
 	if J == 0 {
-		return times(v, -4) // (J+2) v, and J+1 = 1
+		return dd.Pair{Hi: float64(-4 * c)} // (J+2) c, and J+1 = 1
 	}
-	return times(add(times(v, jj), r.C[0]), -2*(J+1))
+	p := float64(c * jj)
+	return times(add(dd.Pair{Hi: p, Lo: math.FMA(c, jj, -p)}, r.C0), -2*(J+1))
 }
 
 // Solve fills x with the members that belong to First, First+2 and so on, such that the sum of
@@ -69,25 +65,33 @@ func (r *Recurrence) Solve(x, low []float64, w float64, negative bool) {
 		}
 		return
 	}
-	up, down := r.start(0, 1, n), r.start(n-1, -1, n)
+	up, down := r.start(0, 1), r.start(n-1, -1)
 	x[0], x[n-1] = 1, 1
 	if low != nil {
 		low[0], low[n-1] = 0, 0
 	}
 	for up.at+1 < down.at {
 		// Whichever still grows alone, otherwise whichever is behind.
+		e := &down
 		if up.grows && !down.grows || up.grows == down.grows && up.at <= n-1-down.at {
-			r.advance(&up, x, low)
-		} else {
-			r.advance(&down, x, low)
+			e = &up
+		}
+		r.advance(e)
+		x[e.at] = e.here.Hi
+		if low != nil {
+			low[e.at] = e.here.Lo
+		}
+		if math.Abs(e.here.Hi) >= 1<<limit {
+			e.shrink(x, low)
 		}
 	}
 	// The ends are neighbors now. One step more gives both of them two members in common, and the ratio of
 	// the two solutions by least squares, so that a zero among them does no harm.
-	upNext, _ := r.next(&up)
-	downNext, _ := r.next(&down)
-	product := add(up.here.Mul(downNext).Normal(), upNext.Mul(down.here).Normal())
-	square := add(downNext.Mul(downNext).Normal(), down.here.Mul(down.here).Normal())
+	upNext, downNext := up, down
+	r.advance(&upNext)
+	r.advance(&downNext)
+	product := add(up.here.Mul(downNext.here).Normal(), upNext.here.Mul(down.here).Normal())
+	square := add(downNext.here.Mul(downNext.here).Normal(), down.here.Mul(down.here).Normal())
 	ratio := product.Mul(inverse(square)).Normal() // up/down
 	total := add(up.norm, down.norm.Mul(ratio.Mul(ratio).Normal()).Normal())
 	upScale := inverse(root(times(total, w)))
@@ -120,53 +124,44 @@ func rescalePairs(x, low []float64, scale dd.Pair) {
 // end is one end of the solution: where it has come to, with the last two members.
 type end struct {
 	at, step     int
+	j, half      float64 // J of the last member, and 1 upwards, -1 downwards
 	here, before dd.Pair
 	link         dd.Pair // between the two
 	norm         dd.Pair // sum of (2j+1) x^2 so far
 	grows        bool
 }
 
-func (r *Recurrence) start(at, step, n int) end {
-	one := dd.Pair{Hi: 1}
-	return end{at: at, step: step, here: one, norm: dd.Pair{Hi: r.twice(at) + 1}, grows: true}
+func (r *Recurrence) start(at, step int) end {
+	j := r.twice(at)
+	return end{at: at, step: step, j: j, half: float64(step), here: dd.Pair{Hi: 1}, norm: dd.Pair{Hi: j + 1}, grows: true}
 }
 
 // twice returns J of the i-th member.
 func (r *Recurrence) twice(i int) float64 { return float64(r.First + 2*i) }
 
-// next returns the member after the last, and the link to it.
-func (r *Recurrence) next(e *end) (v, link dd.Pair) {
-	J := r.twice(e.at)
-	ahead, ahead2, behind := J+2, J, J+2 // where the link is, and the factors of both links
-	if e.step < 0 {
-		ahead, ahead2, behind = J, J+2, J
+// advance goes on by one member.
+func (r *Recurrence) advance(e *end) {
+	outer, inner := e.j+1+e.half, e.j+1-e.half // the factors of the two links, outer the J of the one ahead, too
+	if inner == 0 {
+		inner = 1 // without its factor J
 	}
-	if J == 0 {
-		ahead2 = 1 // without its factor J
-	}
-	link, inverse := r.links(ahead, ahead2)
-	sum := add(r.diagonal(J).Mul(e.here), times(e.link, behind).Mul(e.before))
-	v = sum.Mul(inverse).Normal()
-	return dd.Pair{Hi: -v.Hi, Lo: -v.Lo}, link
+	sum := add(r.diagonal(e.j).Mul(e.here), times(e.link, outer).Mul(e.before))
+	e.link = r.link(outer)
+	t := times(e.link, -inner)
+	q := 1 / t.Hi
+	v := sum.Mul(dd.Pair{Hi: q, Lo: float64(q * math.FMA(-t.Lo, q, math.FMA(-t.Hi, q, 1)))}).Normal()
+	e.grows = math.Abs(v.Hi) >= math.Abs(e.here.Hi) || v.Hi == 0 // a zero in every second place is no decay
+	e.before, e.here = e.here, v
+	e.at += e.step
+	e.j += 2 * e.half
+	e.norm = add(e.norm, times(v.Mul(v), e.j+1))
 }
 
 // Members are kept below 2^480, so that their squares do not overflow, and shrunk with all that came
 // before. What that pushes out of the range of float64 would be zero in the end, too.
 const limit = 480
 
-func (r *Recurrence) advance(e *end, x, low []float64) {
-	v, link := r.next(e)
-	e.grows = math.Abs(v.Hi) >= math.Abs(e.here.Hi) || v.Hi == 0 // a zero in every second place is no decay
-	e.at += e.step
-	e.before, e.here, e.link = e.here, v, link
-	x[e.at] = v.Hi
-	if low != nil {
-		low[e.at] = v.Lo
-	}
-	e.norm = add(e.norm, times(v.Mul(v), r.twice(e.at)+1))
-	if math.Abs(v.Hi) < 1<<limit {
-		return
-	}
+func (e *end) shrink(x, low []float64) {
 	zeros := 0 // two in a row are all that follow; one may stand between others
 	for i := e.at; i >= 0 && i < len(x) && zeros < 2; i -= e.step {
 		if x[i] == 0 {
@@ -216,7 +211,7 @@ func (r *Recurrence) Error(x, low []float64, w, gap float64) float64 {
 			factor = 1 // without its factor J, as the diagonal
 		}
 		if i < n-1 {
-			link, _ = r.links(J+2, 1)
+			link = r.link(J + 2)
 			term := times(link, factor).Mul(dd.Pair{Hi: x[i+1], Lo: low[i+1]}).Normal()
 			sum = add(sum, term)
 			magnitude += math.Abs(term.Hi)
