@@ -149,7 +149,8 @@ func (r *Recurrence) advance(e *end) {
 	e.link = r.link(outer)
 	t := times(e.link, -inner)
 	q := 1 / t.Hi
-	v := sum.Mul(dd.Pair{Hi: q, Lo: float64(q * math.FMA(-t.Lo, q, math.FMA(-t.Hi, q, 1)))}).Normal()
+	v := dd.Pair{Hi: float64(sum.Hi * q)}
+	v.Lo = float64((math.FMA(-v.Hi, t.Hi, sum.Hi) + (sum.Lo - float64(v.Hi*t.Lo))) * q)
 	e.grows = math.Abs(v.Hi) >= math.Abs(e.here.Hi) || v.Hi == 0 // a zero in every second place is no decay
 	e.before, e.here = e.here, v
 	e.at += e.step
