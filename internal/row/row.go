@@ -77,9 +77,10 @@ func (r *Recurrence) Solve(x, low []float64, w float64, negative bool) {
 			e = &up
 		}
 		r.advance(e)
-		x[e.at] = e.here.Hi
 		if low != nil {
-			low[e.at] = e.here.Lo
+			x[e.at], low[e.at] = e.here.Hi, e.here.Lo
+		} else {
+			x[e.at] = e.here.Hi + e.here.Lo
 		}
 		if math.Abs(e.here.Hi) >= 1<<limit {
 			e.shrink(x, low)
