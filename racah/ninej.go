@@ -45,11 +45,7 @@ func CheckNineJ(a, b, c, d, e, f, g, h, i rational.Half) (wigner.Verdict, error)
 		return v, nil
 	}
 	t, _ := nineJArray(a, b, c, d, e, f, g, h, i)
-	total := 0
-	for _, twice := range t {
-		total += twice
-	}
-	if total/2&1 == 1 && t.LinesEqual() {
+	if antisymmetric(&t) {
 		return wigner.Verdict{Rule: wigner.Symmetry}, nil
 	}
 	if nineJExact(&t).IsZero() {
@@ -87,13 +83,25 @@ func forbiddenNineJ(fn string, a, b, c, d, e, f, g, h, i rational.Half) {
 func nineJArray(a, b, c, d, e, f, g, h, i rational.Half) (t square.Array, ok bool) {
 	t = square.Array{a.Twice(), b.Twice(), c.Twice(), d.Twice(), e.Twice(), f.Twice(), g.Twice(), h.Twice(), i.Twice()}
 	sign, odd := int64(0), int64(0)
-	for _, p := range &nineJTriads {
+	triad := func(x, y, z int) {
 		// 64 bits hold the sums of Halves on every platform.
-		x, y, z := int64(t[p[0]]), int64(t[p[1]]), int64(t[p[2]])
-		sign |= (x + y - z) | (y + z - x) | (z + x - y)
-		odd |= x + y + z
+		s := int64(x) + int64(y) + int64(z)
+		sign |= (s - 2*int64(x)) | (s - 2*int64(y)) | (s - 2*int64(z))
+		odd |= s
 	}
+	triad(t[0], t[1], t[2])
+	triad(t[3], t[4], t[5])
+	triad(t[6], t[7], t[8])
+	triad(t[0], t[3], t[6])
+	triad(t[1], t[4], t[7])
+	triad(t[2], t[5], t[8])
 	return t, sign >= 0 && odd&1 == 0
+}
+
+// antisymmetric reports whether an exchange of equal rows or columns changes the sign, so that the symbol is zero.
+func antisymmetric(t *square.Array) bool {
+	total := t[0] + t[1] + t[2] + t[3] + t[4] + t[5] + t[6] + t[7] + t[8]
+	return total&2 != 0 && t.LinesEqual()
 }
 
 // nineJOrders are the permutations of the rows, with whether they are odd.
@@ -137,8 +145,9 @@ func nineJExact(t *square.Array) rational.Surd {
 		return f.SqrtTimes(z)
 	}
 	image, negative := nineJShortest(t)
-	z := nineJSum(new(big.Int), &image)
-	if negative {
+	sum, below := nineJSum(&image, new(binsum.ProductRoom))
+	z := new(big.Int).SetBits(sum)
+	if negative != below {
 		z.Neg(z)
 	}
 	return f.SqrtTimesBig(z)
@@ -159,24 +168,18 @@ func nineJFactors(t *square.Array, x int) [3]tetrad {
 	}
 }
 
-// nineJSum sets z to Σ_x (-1)^(2x) (2x+1) S1 S2 S3, S1 to S3 being the sums in the three 6j symbols,
-// and returns it.
-func nineJSum(z *big.Int, t *square.Array) *big.Int {
+// nineJSum returns |Σ_x (2x+1) S1 S2 S3|, S1 to S3 being the sums in the three 6j symbols, and whether
+// (-1)^(2x) times the sum is negative. It computes in room where that is wide enough.
+func nineJSum(t *square.Array, room *binsum.ProductRoom) (sum []big.Word, negative bool) {
 	first, last := nineJRange(t)
-	term, factor := new(big.Int), new(big.Int)
-	var s binsum.Quadruple
-	for x := first; x <= last; x += 2 {
-		term.SetInt64(int64(x + 1))
-		for _, k := range nineJFactors(t, x) {
-			k.sum(&s)
-			term.Mul(term, s.Int(factor))
+	sum, negative = binsum.SumOfProducts((last-first)/2+1, func(i int) (w uint, s [3]binsum.Quadruple) {
+		x := first + 2*i
+		for i, k := range nineJFactors(t, x) {
+			k.sum(&s[i])
 		}
-		z.Add(z, term)
-	}
-	if first&1 != 0 {
-		z.Neg(z)
-	}
-	return z
+		return uint(x + 1), s
+	}, room)
+	return sum, len(sum) > 0 && negative != (first&1 != 0)
 }
 
 // nineJWord returns the same sum where no product in it leaves a word; ok is false elsewhere.

@@ -2,7 +2,6 @@ package racah
 
 import (
 	"math"
-	"math/big"
 	"slices"
 
 	"example.org/couplet/internal/argument"
@@ -14,9 +13,10 @@ import (
 )
 
 // NineJFloat returns the float64 nearest to the 9j symbol of [NineJ], to even on a tie, whatever its size.
-// Zeros and panics are those of NineJ. Nearly always it allocates nothing while every argument is at most 100,
-// and time grows like the size; where the value is too close to a rounding boundary, or an accidental zero, or
-// an argument above 2^23, it takes the sum of [NineJ] in full.
+// Zeros and panics are those of NineJ. Time grows like the size where no argument is above 2^23 and the symbol is
+// neither an accidental zero nor too close to a rounding boundary, and like that of NineJ elsewhere. It allocates
+// nothing while every argument is at most 100, zeros included, but for tables that are built by the first
+// calls, and for what only the exact route can round, of which no case is known.
 func NineJFloat(a, b, c, d, e, f, g, h, i rational.Half) float64 {
 	t, ok := nineJArray(a, b, c, d, e, f, g, h, i)
 	if !ok {
@@ -26,14 +26,16 @@ func NineJFloat(a, b, c, d, e, f, g, h, i rational.Half) float64 {
 	return nineJFloat(&t)
 }
 
-// nineJSmallError is the bound on the relative error before rounding, derived at nineJSmallFront; that of
-// the long route is largeError.
-const nineJSmallError = 0x1p-96
-
-// nineJFloat returns the value of an allowed symbol: the six triangle coefficients in double-double times
-// the integer sum, which is exact, rounded where the error bound allows, and by the exact route elsewhere.
+// nineJFloat returns the value of an allowed symbol, rounded where the error bound allows, and by the exact
+// route elsewhere.
 func nineJFloat(t *square.Array) float64 {
-	f, ok := nineJFewWords(t)
+	if antisymmetric(t) {
+		return 0
+	}
+	f, ok := nineJByLadders(t)
+	if !ok {
+		f, ok = nineJFewWords(t)
+	}
 	if !ok {
 		f, ok = nineJByRows(t)
 	}
@@ -47,31 +49,130 @@ func nineJFloat(t *square.Array) float64 {
 	return nineJExact(t).Float64()
 }
 
-// nineJFewWords is the route for symbols whose sum fits into two words; ok is false for others too. No
-// symbol exceeds 1, by DLMF (34.7.2), so that the sum is at most 1/front.
-func nineJFewWords(t *square.Array) (f float64, ok bool) {
-	front, ok := nineJSmallFront(t)
-	var s dd.Pair
-	switch {
-	case !ok || front.Hi < 0x1p-126:
-		return 0, false
-	case front.Hi > 0x1p-62:
-		var sum uint64
-		sum, ok = nineJMod64(t)
-		s = dd.FromInt64(int64(sum))
-	default:
-		var high, low uint64
-		high, low, ok = nineJMod128(t)
-		s = dd.FromMod128(high, low)
+// Limits to the lengths of ladders that are summed up exactly, and of any; and, in halves, to the sum of the
+// momenta where it is tried exactly: a calibration, most succeed below and few above.
+const (
+	mostWords    = 24
+	mostPairs    = 64
+	exactMomenta = 108
+)
+
+// nineJByLadders is the route for symbols whose triads are in the tables: the sum over x, from the ladders of
+// the three 6j symbols, times the six triangle coefficients in double-double. ok is false where the rounding
+// stays open: for zeros, of those that are not summed up exactly, and close to boundaries.
+func nineJByLadders(t *square.Array) (f float64, ok bool) {
+	var ladders [3]ladder
+	nineJLadders(&ladders, t)
+	longest, largest := 0, 0
+	for k := range ladders {
+		l := &ladders[k]
+		if !l.reaches() {
+			return 0, false
+		}
+		longest = max(longest, l.n)
+		largest = max(largest, l.p+l.q+l.r+l.s+l.t)
 	}
+	if longest > mostPairs {
+		return 0, false
+	}
+	first, last := nineJRange(t)
+	sum, bound, ok := dd.Pair{}, 0.0, false
+	if longest <= mostWords && largest <= exactMomenta {
+		sum, ok = laddersExact(&ladders, first, last)
+	}
+	if !ok {
+		sum, bound = laddersPair(&ladders, first, last)
+	}
+	if sum.Hi == 0 {
+		return 0, ok
+	}
+	if !(bound < 0x1p-58) {
+		return 0, false
+	}
+	front, ok := nineJSmallFront(t)
 	if !ok {
 		return 0, false
 	}
+	return front.Mul(sum.Scale(0, first&1 != 0)).Round(bound + nineJSmallError)
+}
+
+// nineJLadders sets the ladders of the three symbols of nineJFactors.
+func nineJLadders(l *[3]ladder, t *square.Array) {
+	l[0].set(t[0], t[8], t[5], t[1], t[2]) // { a b c; f i x }
+	l[1].set(t[1], t[5], t[3], t[7], t[4]) // { d e f; b x h }
+	l[2].set(t[7], t[3], t[0], t[8], t[6]) // { g h i; x a d }
+}
+
+// laddersExact returns Σ (2x+1) S1 S2 S3; ok is false where a sum or the total is too large.
+func laddersExact(ladders *[3]ladder, first, last int) (sum dd.Pair, ok bool) {
+	var sums [3][mostWords]float64
+	for k := range ladders {
+		l := &ladders[k]
+		if !l.words(sums[k][:l.n]) {
+			return dd.Pair{}, false
+		}
+	}
+	i, j, k := (first-ladders[0].first)/2, (first-ladders[1].first)/2, (first-ladders[2].first)/2
+	var high, low uint64
+	magnitude := 0.0
+	for x := first; x <= last; x += 2 {
+		p, q, r := sums[0][i]*float64(x+1), sums[1][j], sums[2][k]
+		h, l := binsum.MulInt64(int64(p), int64(q))
+		h, l = binsum.Mul128(h, l, uint64(int64(r)>>63), uint64(int64(r)))
+		high, low = binsum.Add128(high, low, h, l)
+		magnitude += math.Abs(float64(p * q * r))
+		i, j, k = i+1, j+1, k+1
+	}
+	return dd.FromMod128(high, low), magnitude < 0x1p126
+}
+
+// laddersPair returns the same sum in double-double and a bound of its relative error: the roundings of the
+// sum add 10 of Σ |(2x+1) S1 S2 S3| for each term.
+func laddersPair(ladders *[3]ladder, first, last int) (sum dd.Pair, bound float64) {
+	var product, other [mostPairs]bounded
+	n := (last-first)/2 + 1
+	l := &ladders[0]
+	l.pairs(product[:l.n])
+	terms := product[(first-l.first)/2:][:n]
+	for k := range ladders[1:] {
+		l := &ladders[1+k]
+		l.pairs(other[:l.n])
+		factors := other[(first-l.first)/2:][:n]
+		for i := range terms {
+			terms[i].mul(&factors[i])
+		}
+	}
+	var total row.Sum
+	for i := range terms {
+		w := float64(first + 2*i + 1)
+		total.Add(terms[i].Pair, w)
+		bound += float64(w * terms[i].err)
+	}
+	bound += float64(float64(10*n) * total.Magnitude)
+	return total.Value, float64(1.01*uu*bound) / math.Abs(total.Value.Hi) // 1.01 for the roundings here
+}
+
+// nineJFewWords is the route for symbols whose sum fits into two words and the ladders leave open, zeros
+// mainly; ok is false for others too.
+func nineJFewWords(t *square.Array) (f float64, ok bool) {
+	front, ok := nineJSmallFront(t)
+	if !ok || front.Hi < 0x1p-126 {
+		return 0, false
+	}
+	high, low, ok := nineJMod128(t)
+	if !ok {
+		return 0, false
+	}
+	s := dd.FromMod128(high, low)
 	if s.Hi == 0 {
 		return 0, true
 	}
 	return front.Mul(s).Round(nineJSmallError)
 }
+
+// nineJSmallError is the bound on the relative error before rounding, derived at nineJSmallFront; that of
+// the long route is largeError.
+const nineJSmallError = 0x1p-96
 
 // nineJSmallFront returns the product of the six triangle coefficients, where the tables hold them.
 //
@@ -90,27 +191,6 @@ func nineJSmallFront(t *square.Array) (front dd.Pair, ok bool) {
 		deltas[i] = delta(d, j, t[p[0]], t[p[1]])
 	}
 	return deltas[0].Mul(deltas[1]).Mul(deltas[2].Mul(deltas[3])).Mul(deltas[4].Mul(deltas[5])), true
-}
-
-// nineJMod64 returns the sum of nineJSum modulo 2^64, where the tables of binomials reach far enough.
-func nineJMod64(t *square.Array) (sum uint64, ok bool) {
-	first, last := nineJRange(t)
-	var s binsum.Quadruple
-	for x := first; x <= last; x += 2 {
-		term := uint64(x + 1)
-		for _, k := range nineJFactors(t, x) {
-			k.sum(&s)
-			if !s.Fits() {
-				return 0, false
-			}
-			term *= s.Mod64()
-		}
-		sum += term
-	}
-	if first&1 != 0 {
-		sum = -sum
-	}
-	return sum, true
 }
 
 // nineJMod128 returns the sum of nineJSum modulo 2^128, where the tables of binomials reach far enough.
@@ -203,12 +283,13 @@ func nineJManyWords(t *square.Array) (f float64, ok bool) {
 		return 0, false
 	}
 	image, negative := nineJShortest(t)
-	z := nineJSum(new(big.Int), &image)
-	if z.Sign() == 0 {
+	var room binsum.ProductRoom
+	sum, below := nineJSum(&image, &room)
+	if len(sum) == 0 {
 		return 0, true
 	}
-	high, low, exp := binsum.Leading(z.Bits())
-	s := dd.Scaled{Pair: dd.FromWords(high, low).Normal().Scale(0, negative != (z.Sign() < 0)), Exp: exp}
+	high, low, exp := binsum.Leading(sum)
+	s := dd.Scaled{Pair: dd.FromWords(high, low).Normal().Scale(0, negative != below), Exp: exp}
 	return nineJLargeFront(t).Mul(s).Round(largeError)
 }
 

@@ -9,6 +9,7 @@ import (
 	"example.org/couplet/internal/verify"
 	"example.org/couplet/racah"
 	"example.org/couplet/rational"
+	"example.org/couplet/wigner"
 )
 
 // compareNineJ demands the bits of the exact route, rounded.
@@ -89,7 +90,7 @@ func TestNineJFloat(t *testing.T) {
 		}
 	}
 	for _, size := range []int{1, 4, 8, 16, 30, 50, 100} {
-		sets := drawNineJ(60, size)
+		sets := append(drawNineJ(60, size), zeroNineJs(size)...)
 		if n := testing.AllocsPerRun(4, func() {
 			for _, q := range sets {
 				racah.NineJFloat(q[0], q[1], q[2], q[3], q[4], q[5], q[6], q[7], q[8])
@@ -105,5 +106,38 @@ func TestNineJFloat(t *testing.T) {
 	want := "racah.NineJFloat: e = -1; allowed: an integer or half-integer >= 0"
 	if e := verify.Recovered(func() { racah.NineJFloat(i(1), i(1), i(1), i(1), i(-1), i(1), i(1), i(1), i(1)) }); e == nil || e.Error() != want {
 		t.Errorf("panic %v, want %s", e, want)
+	}
+}
+
+// zeroNineJs returns accidental zeros with 2j to 2 size: with a 0 the symbol is a 6j symbol, DLMF (34.7.1), and
+// that with a 1 is proportional to b(b+1) + c(c+1) - a(a+1), DLMF (34.5.7).
+func zeroNineJs(size int) (sets [][9]rational.Half) {
+	i := rational.Int
+	for a := range size + 1 {
+		for b := range a {
+			for c := range b + 1 {
+				if a <= b+c && b*(b+1)+c*(c+1) == a*(a+1) {
+					sets = append(sets, [9]rational.Half{i(a), i(b), i(c), i(c), i(1), i(c), i(b), i(b), i(0)})
+				}
+			}
+		}
+	}
+	return sets
+}
+
+// The accidental zeros are that, and are told without the exact route.
+func TestNineJFloatZeros(t *testing.T) {
+	racah.Fallbacks()
+	sets := zeroNineJs(100)
+	for _, q := range sets {
+		if v, err := racah.CheckNineJ(q[0], q[1], q[2], q[3], q[4], q[5], q[6], q[7], q[8]); err != nil || v.Rule != wigner.Accidental {
+			t.Errorf("%v: %v, %v", q, v, err)
+		}
+		if f := racah.NineJFloat(q[0], q[1], q[2], q[3], q[4], q[5], q[6], q[7], q[8]); f != 0 || math.Signbit(f) {
+			t.Errorf("%v: %g", q, f)
+		}
+	}
+	if n := racah.Fallbacks(); n != 0 || len(sets) < 50 {
+		t.Errorf("%d zeros, %d by the exact route", len(sets), n)
 	}
 }

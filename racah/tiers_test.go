@@ -158,7 +158,11 @@ func TestNineJTiers(t *testing.T) {
 			for i, row := range order.rows {
 				copy(image[3*i:], q[3*row:3*row+3])
 			}
-			v := f.SqrtTimesBig(nineJSum(new(big.Int), &image))
+			sum, negative := nineJSum(&image, new(binsum.ProductRoom))
+			v := f.SqrtTimesBig(new(big.Int).SetBits(sum))
+			if negative {
+				v = v.Neg()
+			}
 			if total := q[0] + q[1] + q[2] + q[3] + q[4] + q[5] + q[6] + q[7] + q[8]; order.odd && total&2 != 0 {
 				v = v.Neg()
 			}
@@ -167,6 +171,9 @@ func TestNineJTiers(t *testing.T) {
 			}
 		}
 		value := exact.Float64()
+		if ladders, ok := nineJByLadders(&q); !ok || math.Float64bits(ladders) != math.Float64bits(value) {
+			t.Fatalf("%v: %g, %v by ladders, exact %g", q, ladders, ok, value)
+		}
 		few, ok := nineJFewWords(&q)
 		many, okMany := nineJManyWords(&q)
 		if rows, ok := nineJByRows(&q); !ok {

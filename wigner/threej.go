@@ -130,7 +130,7 @@ func (q *symbol) verdict() (Verdict, error) {
 	}
 	var r regge
 	r.set(q.j[0], q.j[1], q.j[2], q.m[0], q.m[1], q.m[2])
-	if r.total()&1 == 1 && square.Array(r).LinesEqual() {
+	if r.total()&1 == 1 && (*square.Array)(&r).LinesEqual() {
 		return Verdict{Rule: Symmetry}, nil
 	}
 	if r.exact(false).IsZero() {

@@ -119,6 +119,7 @@ func (s *Sum) words(stack *buffer) (total []big.Word, negative bool) {
 		words = make([]big.Word, 2*width)
 	}
 	total, term := words[:width], words[width:width]
+	clear(total)
 	term = s.first(term)
 	add(total, term)
 	factors := s.Factors

@@ -8,6 +8,12 @@ func Mul128(ah, al, bh, bl uint64) (high, low uint64) {
 	return high + ah*bl + al*bh, low
 }
 
+// MulInt64 returns the product of two numbers with a sign as one modulo 2^128.
+func MulInt64(a, b int64) (high, low uint64) {
+	high, low = bits.Mul64(uint64(a), uint64(b))
+	return high - uint64(a>>63)&uint64(b) - uint64(b>>63)&uint64(a), low
+}
+
 // mulWords returns the product of three numbers of one word modulo 2^128.
 func mulWords(a, b, c uint64) (high, low uint64) {
 	h, l := bits.Mul64(a, b)

@@ -5,11 +5,15 @@ import "sync/atomic"
 // BinomialTops bounds n in the table of binomials C(n, k).
 const BinomialTops = 156
 
-// BinomialError bounds the relative errors of the entries of [Binomials], in units of u^2.
-const BinomialError = 19
+// Bounds on the relative errors of the entries of [Binomials], in units of u^2.
+const (
+	BinomialError = 19
+	ValueError    = 300 // six for each of less than 50 additions of numbers that are not exact
+)
 
-// Binomials holds square roots of binomials at the places Place(n, k), as 1-pairs.
+// Binomials holds binomials and their square roots at the places Place(n, k), as 1-pairs.
 type Binomials struct {
+	Value       [places]Pair // C(n, k), exact below 2^104
 	Root        [places]Pair // sqrt(C(n, k))
 	Inverse     [places]Pair // 1/sqrt(C(n, k))
 	RootNext    [places]Pair // sqrt((n+1) C(n, k))
@@ -41,6 +45,10 @@ func newBinomials() *Binomials {
 	for n := range BinomialTops {
 		for k := range n + 1 {
 			i := Place(n, k)
+			t.Value[i] = Pair{Hi: 1}
+			if 0 < k && k < n {
+				t.Value[i] = t.Value[Place(n-1, k-1)].Add(t.Value[Place(n-1, k)])
+			}
 			root := times(times(f.Root[n].Pair, f.Inverse[k].Pair), f.Inverse[n-k].Pair).Scale(f.Root[n].Exp+f.Inverse[k].Exp+f.Inverse[n-k].Exp, false)
 			inverse := times(times(f.Inverse[n].Pair, f.Root[k].Pair), f.Root[n-k].Pair).Scale(f.Inverse[n].Exp+f.Root[k].Exp+f.Root[n-k].Exp, false)
 			t.Root[i], t.Inverse[i] = root, inverse

@@ -26,6 +26,21 @@ func (a Pair) Mul(b Pair) Pair {
 	return Pair{p, e + math.FMA(a.Lo, b.Hi, float64(a.Hi*b.Lo))}
 }
 
+// Times returns a*f, for a c-pair a (c+1)-pair, with a relative error below (2c+1) u^2.
+func (a Pair) Times(f float64) Pair {
+	p := float64(a.Hi * f)
+	return Pair{p, math.FMA(a.Hi, f, -p) + float64(a.Lo*f)}
+}
+
+// Add returns a+b in normal form. For c-pairs the error is below (4c+2) u^2 times the larger of |a| and
+// |b|; for integers below 2^104, all parts being integers, there is none.
+func (a Pair) Add(b Pair) Pair {
+	s := a.Hi + b.Hi
+	t := s - a.Hi
+	e := (a.Hi - (s - t)) + (b.Hi - t) // Knuth's two-sum
+	return Pair{s, e + (a.Lo + b.Lo)}.Normal()
+}
+
 // Normal returns a in normal form, exactly (Dekker's fast two-sum, |a.Lo| <= |a.Hi|).
 func (a Pair) Normal() Pair {
 	hi := a.Hi + a.Lo

@@ -45,7 +45,7 @@ func (r *Recurrence) diagonal(J float64) dd.Pair {
 		return dd.Pair{Hi: float64(-4 * c)} // (J+2) c, and J+1 = 1
 	}
 	p := float64(c * jj)
-	return times(add(dd.Pair{Hi: p, Lo: math.FMA(c, jj, -p)}, r.C0), -2*(J+1))
+	return dd.Pair{Hi: p, Lo: math.FMA(c, jj, -p)}.Add(r.C0).Times(-2 * (J + 1))
 }
 
 // Solve fills x with the members that belong to First, First+2 and so on, such that the sum of
@@ -91,11 +91,11 @@ func (r *Recurrence) Solve(x, low []float64, w float64, negative bool) {
 	upNext, downNext := up, down
 	r.advance(&upNext)
 	r.advance(&downNext)
-	product := add(up.here.Mul(downNext.here).Normal(), upNext.here.Mul(down.here).Normal())
-	square := add(downNext.here.Mul(downNext.here).Normal(), down.here.Mul(down.here).Normal())
+	product := up.here.Mul(downNext.here).Normal().Add(upNext.here.Mul(down.here).Normal())
+	square := downNext.here.Mul(downNext.here).Normal().Add(down.here.Mul(down.here).Normal())
 	ratio := product.Mul(inverse(square)).Normal() // up/down
-	total := add(up.norm, down.norm.Mul(ratio.Mul(ratio).Normal()).Normal())
-	upScale := inverse(root(times(total, w)))
+	total := up.norm.Add(down.norm.Mul(ratio.Mul(ratio).Normal()).Normal())
+	upScale := inverse(root(total.Times(w)))
 	downScale := upScale.Mul(ratio).Normal()
 	if (downScale.Hi < 0) != negative {
 		upScale, downScale = upScale.Scale(0, true), downScale.Scale(0, true)
@@ -146,9 +146,9 @@ func (r *Recurrence) advance(e *end) {
 	if inner == 0 {
 		inner = 1 // without its factor J
 	}
-	sum := add(r.diagonal(e.j).Mul(e.here), times(e.link, outer).Mul(e.before))
+	sum := r.diagonal(e.j).Mul(e.here).Add(e.link.Times(outer).Mul(e.before))
 	e.link = r.link(outer)
-	t := times(e.link, -inner)
+	t := e.link.Times(-inner)
 	q := 1 / t.Hi
 	v := dd.Pair{Hi: float64(sum.Hi * q)}
 	v.Lo = float64((math.FMA(-v.Hi, t.Hi, sum.Hi) + (sum.Lo - float64(v.Hi*t.Lo))) * q)
@@ -156,7 +156,7 @@ func (r *Recurrence) advance(e *end) {
 	e.before, e.here = e.here, v
 	e.at += e.step
 	e.j += 2 * e.half
-	e.norm = add(e.norm, times(v.Mul(v), e.j+1))
+	e.norm = e.norm.Add(v.Mul(v).Times(e.j + 1))
 }
 
 // Members are kept below 2^480, so that their squares do not overflow, and shrunk with all that came
@@ -204,8 +204,8 @@ func (r *Recurrence) Error(x, low []float64, w, gap float64) float64 {
 		sum := r.diagonal(J).Mul(here).Normal()
 		magnitude := math.Abs(sum.Hi)
 		if i > 0 {
-			term := times(link, J+2).Mul(dd.Pair{Hi: x[i-1], Lo: low[i-1]}).Normal()
-			sum = add(sum, term)
+			term := link.Times(J + 2).Mul(dd.Pair{Hi: x[i-1], Lo: low[i-1]}).Normal()
+			sum = sum.Add(term)
 			magnitude += math.Abs(term.Hi)
 		}
 		factor := J
@@ -214,8 +214,8 @@ func (r *Recurrence) Error(x, low []float64, w, gap float64) float64 {
 		}
 		if i < n-1 {
 			link = r.link(J + 2)
-			term := times(link, factor).Mul(dd.Pair{Hi: x[i+1], Lo: low[i+1]}).Normal()
-			sum = add(sum, term)
+			term := link.Times(factor).Mul(dd.Pair{Hi: x[i+1], Lo: low[i+1]}).Normal()
+			sum = sum.Add(term)
 			magnitude += math.Abs(term.Hi)
 		}
 		scale := 1 / (2 * (J + 1) * (J + 2) * factor)
@@ -228,20 +228,7 @@ func (r *Recurrence) Error(x, low []float64, w, gap float64) float64 {
 	return float64(1.01*length/gap) + float64(float64(n+20)*4*uu) // 1.01 for the roundings here and the second order
 }
 
-// The operations below have relative errors of some u^2, add relative to the larger operand, and all but
-// times return numbers in normal form; times adds one to the c of a c-pair.
-
-func add(a, b dd.Pair) dd.Pair {
-	s := a.Hi + b.Hi
-	t := s - a.Hi
-	e := (a.Hi - (s - t)) + (b.Hi - t) // Knuth's two-sum
-	return dd.Pair{Hi: s, Lo: e + (a.Lo + b.Lo)}.Normal()
-}
-
-func times(a dd.Pair, f float64) dd.Pair {
-	p := float64(a.Hi * f)
-	return dd.Pair{Hi: p, Lo: math.FMA(a.Hi, f, -p) + float64(a.Lo*f)}
-}
+// These two have relative errors of some u^2 and return numbers in normal form.
 
 func inverse(a dd.Pair) dd.Pair {
 	q := 1 / a.Hi
@@ -270,7 +257,7 @@ type Sum struct {
 
 // Add adds w*v.
 func (s *Sum) Add(v dd.Pair, w float64) {
-	t := times(v, w).Normal()
-	s.Value = add(s.Value, t)
+	t := v.Times(w).Normal()
+	s.Value = s.Value.Add(t)
 	s.Magnitude += math.Abs(t.Hi)
 }

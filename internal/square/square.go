@@ -8,14 +8,9 @@ type Array [9]int
 
 // LinesEqual reports whether two rows, or two columns, are equal: their exchange then changes nothing but
 // the sign. Every array that any odd one of the 72 symmetries leaves alone is of this kind.
-func (a Array) LinesEqual() bool {
-	for _, p := range [3][2]int{{0, 1}, {1, 2}, {2, 0}} {
-		i, j := p[0], p[1]
-		rows := a[3*i] == a[3*j] && a[3*i+1] == a[3*j+1] && a[3*i+2] == a[3*j+2]
-		columns := a[i] == a[j] && a[3+i] == a[3+j] && a[6+i] == a[6+j]
-		if rows || columns {
-			return true
-		}
+func (a *Array) LinesEqual() bool {
+	equal := func(i, j, step int) bool {
+		return (a[i]^a[j])|(a[i+step]^a[j+step])|(a[i+2*step]^a[j+2*step]) == 0 // one branch
 	}
-	return false
+	return equal(0, 3, 1) || equal(3, 6, 1) || equal(6, 0, 1) || equal(0, 1, 3) || equal(1, 2, 3) || equal(2, 0, 3)
 }

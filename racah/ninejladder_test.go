@@ -1,0 +1,183 @@
+package racah
+
+import (
+	"math"
+	"math/big"
+	"math/rand/v2"
+	"testing"
+
+	"example.org/couplet/internal/binsum"
+	"example.org/couplet/internal/square"
+	"example.org/couplet/rational"
+	"example.org/couplet/wigner"
+)
+
+// compareLadder demands the sums of the ladder {p q x; r s t} as Racah's sum gives them: those in words
+// exactly, those in double-double within their bounds. It returns the largest error in units of its bound; ok is
+// false where one of the triads without x is forbidden, or there is no x.
+func compareLadder(t *testing.T, p, q, r, s, u int) (exact bool, worst float64, ok bool) {
+	t.Helper()
+	h := rational.Halves
+	if wigner.Triad(h(p), h(s), h(u)) != wigner.NonZero || wigner.Triad(h(r), h(q), h(u)) != wigner.NonZero {
+		return false, 0, false
+	}
+	var l ladder
+	if l.set(p, q, r, s, u); l.n < 1 || !l.reaches() {
+		return false, 0, false
+	}
+	words, pairs := make([]float64, l.n), make([]bounded, l.n)
+	exact = l.words(words)
+	l.pairs(pairs)
+	for i := range words {
+		k := tetrad{p, q, l.first + 2*i, r, s, u}
+		var sum binsum.Quadruple
+		k.sum(&sum)
+		want := new(big.Float).SetPrec(2000).SetInt(sum.Int(new(big.Int)))
+		if exact && want.Cmp(big.NewFloat(words[i])) != 0 {
+			t.Fatalf("%+v: %.0f in words, want %.0f", k, words[i], want)
+		}
+		if size, _ := want.Float64(); math.Abs(size) >= mostWord && exact {
+			t.Fatalf("%+v: %g is not refused", k, size)
+		}
+		v := pairs[i]
+		got := new(big.Float).SetPrec(2000).SetFloat64(v.Hi)
+		got.Add(got, new(big.Float).SetPrec(2000).SetFloat64(v.Lo))
+		d, _ := got.Sub(got, want).Float64()
+		if bound := v.err*uu - 13*uu*math.Abs(v.Hi); !(math.Abs(d) <= bound) { // the 13 is room for what follows
+			t.Fatalf("%+v: %g %+g in double-double, want %g: error %g, bound %g", k, v.Hi, v.Lo, want, d, bound)
+		} else if d != 0 {
+			worst = max(worst, math.Abs(d)/bound)
+		}
+	}
+	return exact, worst, true
+}
+
+// Every ladder of small momenta, and random ones up to where the tables end.
+func TestLadders(t *testing.T) {
+	const top = 8
+	cases := 0
+	var q [5]int
+	var visit func(place int)
+	visit = func(place int) {
+		if place < len(q) {
+			for q[place] = 0; q[place] <= top; q[place]++ {
+				visit(place + 1)
+			}
+			return
+		}
+		exact, _, ok := compareLadder(t, q[0], q[1], q[2], q[3], q[4])
+		if ok {
+			cases++
+		}
+		if ok && !exact {
+			t.Fatalf("%v is not exact", q)
+		}
+	}
+	visit(0)
+	r := rand.New(rand.NewPCG(31, 31))
+	large, words, worst := 0, 0, 0.0
+	for range 200000 {
+		size := []int{16, 30, 60, 100}[r.IntN(4)]
+		for i := range q {
+			q[i] = r.IntN(size + 1)
+		}
+		exact, off, ok := compareLadder(t, q[0], q[1], q[2], q[3], q[4])
+		if !ok {
+			continue
+		}
+		large++
+		if exact {
+			words++
+		}
+		worst = max(worst, off)
+		if large == 3000 {
+			break
+		}
+	}
+	t.Logf("%d small ladders, %d larger ones, %d of them exact; errors up to %.3f of the bound", cases, large, words, worst)
+	if cases < 4000 || large < 3000 || words < large/4 || words > large*3/4 {
+		t.Error("the draw misses")
+	}
+	if worst < 1.0/64 {
+		t.Error("the bound is far too wide")
+	}
+}
+
+// A step rounds to the right integer up to mostWord, whatever cancels.
+func TestWordStep(t *testing.T) {
+	r := rand.New(rand.NewPCG(32, 32))
+	cases := 0
+	for range 1000000 {
+		lead, d, e := 1+r.Int64N(1<<r.IntN(37)), r.Int64N(33)-16, r.Int64N(33)-16
+		s, u := r.Int64N(2*mostWord)-mostWord, r.Int64N(2*mostWord)-mostWord
+		v := -(d*s + e*u)
+		if v >= mostWord || v <= -mostWord {
+			continue
+		}
+		cases++
+		if got := wordStep(float64(lead*d), float64(s), float64(lead*e), float64(u), float64(lead)); got != float64(v) {
+			t.Fatalf("(%d s + %d t) of %d, %d: %.0f, want %d", d, e, s, u, got, v)
+		}
+	}
+	if cases < 50000 {
+		t.Errorf("only %d cases", cases)
+	}
+}
+
+// drawArray returns a random allowed 9j symbol with 2j to size.
+func drawArray(r *rand.Rand, size int) (q square.Array) {
+	for {
+		for i := range q {
+			q[i] = r.IntN(size + 1)
+		}
+		if nineJAllowed(&q) {
+			return q
+		}
+	}
+}
+
+// The products and sums keep within their bounds, too: what a bound misses, the rounding of the whole would
+// show only by chance.
+func TestLaddersPair(t *testing.T) {
+	r := rand.New(rand.NewPCG(33, 33))
+	worst, cases, exacts := 0.0, 0, 0
+	for cases < 2000 {
+		size := []int{4, 16, 30, 60}[r.IntN(4)]
+		q := drawArray(r, size)
+		var l [3]ladder
+		nineJLadders(&l, &q)
+		if max(l[0].n, l[1].n, l[2].n) > mostPairs || !l[0].reaches() || !l[1].reaches() || !l[2].reaches() {
+			continue
+		}
+		cases++
+		first, last := nineJRange(&q)
+		sum, bound := laddersPair(&l, first, last)
+		words, negative := nineJSum(&q, new(binsum.ProductRoom))
+		z := new(big.Int).SetBits(words)
+		if negative != (first&1 != 0) {
+			z.Neg(z)
+		}
+		if max(l[0].n, l[1].n, l[2].n) > mostWords {
+		} else if exact, ok := laddersExact(&l, first, last); ok {
+			exacts++
+			if f, _ := new(big.Float).SetInt(z).Float64(); f != exact.Hi+exact.Lo {
+				t.Fatalf("%v: %g, want %g", q, exact, f)
+			}
+		}
+		if z.Sign() == 0 {
+			continue
+		}
+		want := new(big.Float).SetPrec(2000).SetInt(z)
+		got := new(big.Float).SetPrec(2000).SetFloat64(sum.Hi)
+		got.Add(got, new(big.Float).SetPrec(2000).SetFloat64(sum.Lo))
+		d, _ := got.Sub(got, want).Quo(got, want).Float64()
+		if !(math.Abs(d) <= bound) {
+			t.Fatalf("%v: error %g, bound %g", q, d, bound)
+		}
+		worst = max(worst, math.Abs(d)/bound)
+	}
+	t.Logf("%d sums, %d of them exact; errors up to %.3f of the bound", cases, exacts, worst)
+	if worst < 1.0/128 || exacts < cases/4 {
+		t.Error("the bound is far too wide, or the draw misses")
+	}
+}
