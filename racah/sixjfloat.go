@@ -54,7 +54,7 @@ func (k *tetrad) float(negative bool) float64 {
 	var sum binsum.Quadruple
 	k.sum(&sum)
 	f, ok := 0.0, false
-	if sum.Fits() {
+	if sum.Fits() && sum.T < dd.BinomialTops { // no triad is larger
 		f, ok = k.fewWords(&sum, negative)
 	} else {
 		f, ok = k.manyWords(&sum, negative)
@@ -81,6 +81,12 @@ func (k *tetrad) fewWords(sum *binsum.Quadruple, negative bool) (f float64, ok b
 	case front.Hi > 0x1p-126:
 		s = dd.FromMod128(sum.Mod128())
 	default:
+		if front.Hi > 0x1p-190 {
+			if w, ok := sum.Mod192(); ok {
+				s = dd.FromMod192(w.High, w.Middle, w.Low)
+				break
+			}
+		}
 		words := sum.Sum()
 		if high, low, exp, sign := words.Leading(); high != 0 {
 			s = dd.FromWords(high, low).Scale(exp, sign)

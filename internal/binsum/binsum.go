@@ -142,9 +142,11 @@ func (s *Sum) first(term []big.Word) []big.Word {
 	}
 	table := binomials()
 	for _, b := range s.Factors[:s.Count] {
-		if b.Top < tableTops && table.high[place(b.Top, b.Low)] == 0 && bits.UintSize == 64 {
-			term = mulWord(term, uint(table.low[place(b.Top, b.Low)]))
-			continue
+		if b.Top < tableTops && bits.UintSize == 64 {
+			if i := place(b.Top, b.Low); table.high[i]|table.third[i] == 0 {
+				term = mulWord(term, uint(table.low[i]))
+				continue
+			}
 		}
 		// One factor after the other: C(n, k) = n/k C(n-1, k-1).
 		k := min(b.Low, b.Top-b.Low)

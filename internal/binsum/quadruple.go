@@ -71,6 +71,28 @@ func (s *Quadruple) Mod128() (high, low uint64) {
 	return negated(high, low, last)
 }
 
+// Mod192 returns S modulo 2^192, in three words, where Fits; ok is false where a binomial with one of the N
+// on top may exceed a word.
+func (s *Quadruple) Mod192() (w Words192, ok bool) {
+	if max(s.N1, s.N2, s.N3) > oneWordTop {
+		return w, false
+	}
+	first, last := s.limits()
+	t := binomials()
+	h, i, j, k := place(first+1, s.T+1), place(s.N1, first-s.S1), place(s.N2, first-s.S2), place(s.N3, first-s.S3)
+	for range last - first + 1 {
+		w = product192(t.low[i], t.low[j], t.low[k]).mul(t.third[h], t.high[h], t.low[h]).sub(w)
+		h += tableTops
+		i++
+		j++
+		k++
+	}
+	if last&1 != 0 {
+		w = Words192{}.sub(w)
+	}
+	return w, true
+}
+
 // Word returns S where a signed word is sure to hold it; ok is false elsewhere.
 func (s *Quadruple) Word() (v int64, ok bool) {
 	if !s.inWord() {

@@ -6,14 +6,14 @@ import (
 )
 
 // tableTops bounds the tops of the binomials in the table.
-const tableTops = 156
+const tableTops = 189
 
 // oneWordTop is the last row of binomials that fit into a word each: C(67, 33) < 2^64.
 const oneWordTop = 67
 
-// pascal holds C(top, low) modulo 2^128, in two words, at index place(top, low).
+// pascal holds C(top, low) modulo 2^192, in three words, at index place(top, low).
 type pascal struct {
-	low, high [tableTops * tableTops]uint64
+	low, high, third [tableTops * tableTops]uint64
 }
 
 var pascalTable atomic.Pointer[pascal]
@@ -35,7 +35,9 @@ func newPascal() *pascal {
 			a, b := place(top-1, k-1), place(top-1, k)
 			sum, carry := bits.Add64(t.low[a], t.low[b], 0)
 			t.low[place(top, k)] = sum
-			t.high[place(top, k)] = t.high[a] + t.high[b] + carry
+			sum, carry = bits.Add64(t.high[a], t.high[b], carry)
+			t.high[place(top, k)] = sum
+			t.third[place(top, k)] = t.third[a] + t.third[b] + carry
 		}
 	}
 	pascalTable.Store(t) // racing first calls store equal tables
