@@ -11,6 +11,7 @@ import (
 
 	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/dd"
+	"example.org/couplet/internal/mantissa"
 	"example.org/couplet/internal/published"
 	"example.org/couplet/internal/square"
 	"example.org/couplet/internal/verify"
@@ -85,10 +86,15 @@ func drawHardSixJ(r *rand.Rand) (q []int, p dd.Pair, ok bool) {
 		return nil, p, false
 	}
 	front := k.smallFront(&sum)
-	if front.Hi < 0x1p-126 {
+	if front.Words() > 2 {
 		return nil, p, false
 	}
-	return []int{k.a, k.b, k.c, k.d, k.e, k.f}, front.Mul(dd.FromMod128(sum.Mod128())), true
+	high, low := sum.Mod128()
+	n, _ := mantissa.FromMod128(high, low)
+	if _, ok := front.Mul(n).Round(64, 64, 0); ok || n.M == 0 { // most are far from every boundary
+		return nil, p, false
+	}
+	return []int{k.a, k.b, k.c, k.d, k.e, k.f}, k.largeFront().Mul(dd.Scaled{Pair: dd.FromMod128(high, low).Normal()}).Pair, true
 }
 
 func drawHardNineJ(r *rand.Rand) (q []int, p dd.Pair, ok bool) {
@@ -99,12 +105,11 @@ func drawHardNineJ(r *rand.Rand) (q []int, p dd.Pair, ok bool) {
 	if !nineJAllowed(&t) {
 		return nil, p, false
 	}
-	front, ok := nineJSmallFront(&t)
-	if !ok || front.Hi < 0x1p-126 {
+	if nineJSmallFront(&t).Words() > 2 {
 		return nil, p, false
 	}
 	high, low, ok := nineJMod128(&t)
-	return t[:], front.Mul(dd.FromMod128(high, low)), ok
+	return t[:], nineJLargeFront(&t).Mul(dd.Scaled{Pair: dd.FromMod128(high, low).Normal()}).Pair, ok
 }
 
 func (kind hardKind) search(t *testing.T, draws int) {
@@ -115,7 +120,7 @@ func (kind hardKind) search(t *testing.T, draws int) {
 		if !ok || p.Hi == 0 {
 			continue
 		}
-		if h := verify.Hardness(p.Normal()); found.Wants(h) {
+		if h := verify.Hardness(p); found.Wants(h) {
 			found.Add(h, strings.Trim(strings.ReplaceAll(fmt.Sprint(q), " ", ","), "[]"))
 		}
 	}

@@ -23,8 +23,8 @@ import (
 // It is zero where a row or a column breaks a selection rule; [CheckNineJ] says which. It panics with
 // *rational.ArgumentError for a negative argument.
 func NineJ(a, b, c, d, e, f, g, h, i rational.Half) rational.Surd {
-	t, ok := nineJArray(a, b, c, d, e, f, g, h, i)
-	if !ok {
+	var t square.Array
+	if !nineJArray(&t, a, b, c, d, e, f, g, h, i) {
 		forbiddenNineJ("racah.NineJ", a, b, c, d, e, f, g, h, i)
 		return rational.Surd{}
 	}
@@ -44,7 +44,8 @@ func CheckNineJ(a, b, c, d, e, f, g, h, i rational.Half) (wigner.Verdict, error)
 	if v.Zero() {
 		return v, nil
 	}
-	t, _ := nineJArray(a, b, c, d, e, f, g, h, i)
+	var t square.Array
+	nineJArray(&t, a, b, c, d, e, f, g, h, i)
 	if antisymmetric(&t) {
 		return wigner.Verdict{Rule: wigner.Symmetry}, nil
 	}
@@ -78,10 +79,12 @@ func forbiddenNineJ(fn string, a, b, c, d, e, f, g, h, i rational.Half) {
 	}
 }
 
-// nineJArray returns twice the arguments; ok is false for a symbol that a selection rule forbids and for a
-// negative argument.
-func nineJArray(a, b, c, d, e, f, g, h, i rational.Half) (t square.Array, ok bool) {
-	t = square.Array{a.Twice(), b.Twice(), c.Twice(), d.Twice(), e.Twice(), f.Twice(), g.Twice(), h.Twice(), i.Twice()}
+// nineJArray sets t to twice the arguments, in place: a copy of what was just written has to wait. It returns
+// false for a symbol that a selection rule forbids and for a negative argument.
+func nineJArray(t *square.Array, a, b, c, d, e, f, g, h, i rational.Half) bool {
+	t[0], t[1], t[2] = a.Twice(), b.Twice(), c.Twice()
+	t[3], t[4], t[5] = d.Twice(), e.Twice(), f.Twice()
+	t[6], t[7], t[8] = g.Twice(), h.Twice(), i.Twice()
 	sign, odd := int64(0), int64(0)
 	triad := func(x, y, z int) {
 		// 64 bits hold the sums of Halves on every platform.
@@ -95,7 +98,7 @@ func nineJArray(a, b, c, d, e, f, g, h, i rational.Half) (t square.Array, ok boo
 	triad(t[0], t[3], t[6])
 	triad(t[1], t[4], t[7])
 	triad(t[2], t[5], t[8])
-	return t, sign >= 0 && odd&1 == 0
+	return sign >= 0 && odd&1 == 0
 }
 
 // antisymmetric reports whether an exchange of equal rows or columns changes the sign, so that the symbol is zero.

@@ -7,6 +7,7 @@ import (
 	"example.org/couplet/internal/argument"
 	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/dd"
+	"example.org/couplet/internal/mantissa"
 	"example.org/couplet/internal/row"
 	"example.org/couplet/internal/square"
 	"example.org/couplet/rational"
@@ -18,8 +19,8 @@ import (
 // nothing while every argument is at most 100, zeros included, but for tables that are built by the first
 // calls, and for what only the exact route can round, of which no case is known.
 func NineJFloat(a, b, c, d, e, f, g, h, i rational.Half) float64 {
-	t, ok := nineJArray(a, b, c, d, e, f, g, h, i)
-	if !ok {
+	var t square.Array
+	if !nineJArray(&t, a, b, c, d, e, f, g, h, i) {
 		forbiddenNineJ("racah.NineJFloat", a, b, c, d, e, f, g, h, i)
 		return 0
 	}
@@ -89,11 +90,15 @@ func nineJByLadders(t *square.Array) (f float64, ok bool) {
 	if !(bound < 0x1p-58) {
 		return 0, false
 	}
-	front, ok := nineJSmallFront(t)
-	if !ok {
-		return 0, false
+	sum = sum.Normal().Scale(0, first&1 != 0)
+	if bound < 0x1p-66 { // 1/4 in M
+		n := mantissa.FromPair(sum.Scale(0, sum.Hi < 0))
+		f, ok = nineJSmallFront(t).Mul(n).Round(nineJSmallBelow, nineJSmallAbove, math.Float64bits(sum.Hi)>>63)
+		if ok {
+			return f, ok
+		}
 	}
-	return front.Mul(sum.Scale(0, first&1 != 0)).Round(bound + nineJSmallError)
+	return nineJLargeFront(t).Mul(dd.Scaled{Pair: sum}).Round(bound + largeError)
 }
 
 // nineJLadders sets the ladders of the three symbols of nineJFactors.
@@ -153,10 +158,13 @@ func laddersPair(ladders *[3]ladder, first, last int) (sum dd.Pair, bound float6
 }
 
 // nineJFewWords is the route for symbols whose sum fits into two words and the ladders leave open, zeros
-// mainly; ok is false for others too.
+// mainly; ok is false for others too. The front, at least 2^Exp, tells that |S| <= 1/front is below 2^126.
 func nineJFewWords(t *square.Array) (f float64, ok bool) {
-	front, ok := nineJSmallFront(t)
-	if !ok || front.Hi < 0x1p-126 {
+	if nineJTop(t) > dd.BinomialTops {
+		return 0, false
+	}
+	front := nineJLargeFront(t)
+	if front.Exp < -125 {
 		return 0, false
 	}
 	high, low, ok := nineJMod128(t)
@@ -167,30 +175,24 @@ func nineJFewWords(t *square.Array) (f float64, ok bool) {
 	if s.Hi == 0 {
 		return 0, true
 	}
-	return front.Mul(s).Round(nineJSmallError)
+	return front.Mul(dd.Scaled{Pair: s.Normal()}).Round(largeError)
 }
 
-// nineJSmallError is the bound on the relative error before rounding, derived at nineJSmallFront; that of
-// the long route is largeError.
-const nineJSmallError = 0x1p-96
+// How far M of the product of nineJSmallFront and the sum may be above and below that of the true value. Twelve
+// entries of tables leave 1 each and so does the sum, in either direction; twelve products, which are rounded
+// down, 2 each; and 1 is for all that is of second order, and for the bound of the sum.
+const (
+	nineJSmallBelow = 13 + 1
+	nineJSmallAbove = 13 + 2*12 + 1
+)
 
-// nineJSmallFront returns the product of the six triangle coefficients, where the tables hold them.
-//
-// In units of u^2 the coefficients, 3-pairs, have errors of 45 each: two of 19 and 7 for the product. Three
-// products of 3-pairs cost 25 each, 7*7 costs 85, 15*7 costs 157, and the product with the sum, 23*3, 125
-// with 2 more for the sum itself (dd.Pair.Mul): 716 in all with the 2 of the rounding, below 2^10 u^2. That
-// is why nineJSmallError is wider than smallError.
-func nineJSmallFront(t *square.Array) (front dd.Pair, ok bool) {
-	d := dd.SqrtBinomials()
-	var deltas [6]dd.Pair
-	for i, p := range &nineJTriads {
-		j := (t[p[0]] + t[p[1]] + t[p[2]]) / 2
-		if j >= dd.BinomialTops {
-			return dd.Pair{}, false
-		}
-		deltas[i] = delta(d, j, t[p[0]], t[p[1]])
-	}
-	return deltas[0].Mul(deltas[1]).Mul(deltas[2].Mul(deltas[3])).Mul(deltas[4].Mul(deltas[5])), true
+// nineJSmallFront returns the product of the six triangle coefficients of a symbol whose triads are below
+// dd.BinomialTops.
+func nineJSmallFront(t *square.Array) mantissa.Number {
+	d := mantissa.SqrtBinomials()
+	triad := func(x, y, z int) mantissa.Number { return delta(d, (x+y+z)>>1, x, y) }
+	rows := triad(t[0], t[1], t[2]).Mul(triad(t[3], t[4], t[5])).Mul(triad(t[6], t[7], t[8]))
+	return rows.Mul(triad(t[0], t[3], t[6]).Mul(triad(t[1], t[4], t[7])).Mul(triad(t[2], t[5], t[8])))
 }
 
 // nineJMod128 returns the sum of nineJSum modulo 2^128, where the tables of binomials reach far enough.

@@ -67,7 +67,7 @@ const mostWord = 1 << 49
 // comes from below and the other from above, which is two chains of operations that do not wait for each
 // other.
 func (l *ladder) words(v []float64) (ok bool) {
-	table := &dd.SqrtBinomials().Value
+	table := dd.Binomials()
 	end := func(x int) float64 {
 		h, i, j, k, sign := l.end(x)
 		return float64(sign*table[h].Hi*table[i].Hi) * float64(table[j].Hi*table[k].Hi)
@@ -137,13 +137,13 @@ func (p *bounded) mul(s *bounded) {
 //
 // and err is e + 13 |S|, at the least.
 func (l *ladder) pairs(v []bounded) {
-	table := &dd.SqrtBinomials().Value
+	table := dd.Binomials()
 	end := func(x int) bounded {
 		h, i, j, k, sign := l.end(x)
 		s := table[h].Mul(table[i]).Normal().Mul(table[j].Mul(table[k]).Normal()).Normal()
 		err := float64(s.Hi * endError)
 		if s.Hi > 0x1p103 { // otherwise all four are exact
-			err += float64(s.Hi * (4 * dd.ValueError))
+			err += float64(s.Hi * (4 * dd.BinomialError))
 		}
 		return bounded{dd.Pair{Hi: sign * s.Hi, Lo: sign * s.Lo}, err}
 	}

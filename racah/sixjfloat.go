@@ -5,6 +5,7 @@ import (
 
 	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/dd"
+	"example.org/couplet/internal/mantissa"
 	"example.org/couplet/rational"
 )
 
@@ -39,24 +40,22 @@ func WFloat(a, b, c, d, e, f rational.Half) float64 {
 	return k.float(wPhase(a, b, c, d))
 }
 
-// Bounds on the relative error before rounding, derived at smallFront and largeFront.
-const (
-	smallError = 0x1p-97
-	largeError = 0x1p-98
-)
+// largeError bounds the relative error before rounding, derived at largeFront.
+const largeError = 0x1p-98
 
 // fallbacks counts the values that only the exact route could round.
 var fallbacks atomic.Int64
 
-// float returns the value, or its negative: the front in double-double times the integer sum, which is
-// exact, rounded where the error bound allows, and by the exact route elsewhere.
+// float returns the value, or its negative: the integer sum, exact or its leading bits, times the front, rounded
+// where the error bound allows, in 64 bits first and then in double-double, and by the exact route elsewhere.
 func (k *tetrad) float(negative bool) float64 {
 	var sum binsum.Quadruple
 	k.sum(&sum)
 	f, ok := 0.0, false
 	if sum.Fits() && sum.T < dd.BinomialTops { // no triad is larger
 		f, ok = k.fewWords(&sum, negative)
-	} else {
+	}
+	if !ok {
 		f, ok = k.manyWords(&sum, negative)
 	}
 	if ok {
@@ -70,32 +69,44 @@ func (k *tetrad) float(negative bool) float64 {
 	return v.Float64()
 }
 
-// fewWords is the route for symbols whose binomials are in the tables. No symbol exceeds 1, so that
-// |S| <= 1/front tells how many words hold the sum.
+// fewWords is the route for symbols whose binomials are in the tables; ok is false, too, where three words are
+// not sure to hold the sum. No symbol exceeds 1, so that |S| <= 1/front.
 func (k *tetrad) fewWords(sum *binsum.Quadruple, negative bool) (f float64, ok bool) {
 	front := k.smallFront(sum)
-	var s dd.Pair
-	switch {
-	case front.Hi > 0x1p-62:
-		s = dd.FromInt64(int64(sum.Mod64()))
-	case front.Hi > 0x1p-126:
-		s = dd.FromMod128(sum.Mod128())
+	var n mantissa.Number
+	var sign uint64
+	words := front.Words()
+	switch words {
+	case 1:
+		n, sign = mantissa.FromMod64(sum.Mod64())
+	case 2:
+		n, sign = mantissa.FromMod128(sum.Mod128())
 	default:
-		if front.Hi > 0x1p-190 {
-			if w, ok := sum.Mod192(); ok {
-				s = dd.FromMod192(w.High, w.Middle, w.Low)
-				break
-			}
+		w, ok := sum.Mod192()
+		if words > 3 || !ok {
+			return 0, false
 		}
-		words := sum.Sum()
-		if high, low, exp, sign := words.Leading(); high != 0 {
-			s = dd.FromWords(high, low).Scale(exp, sign)
-		}
+		n, sign = mantissa.FromMod192(w.High, w.Middle, w.Low)
 	}
-	if s.Hi == 0 {
+	if n.M == 0 {
 		return 0, true
 	}
-	return front.Mul(s.Scale(0, negative)).Round(smallError)
+	if negative {
+		sign ^= 1
+	}
+	if f, ok = front.Mul(n).Round(smallBelow, smallAbove, sign); ok {
+		return f, ok
+	}
+	var s dd.Pair
+	switch words {
+	case 1:
+		s = dd.FromInt64(int64(sum.Mod64()))
+	case 2:
+		s = dd.FromMod128(sum.Mod128()).Normal()
+	default:
+		return 0, false
+	}
+	return k.roundLarge(dd.Scaled{Pair: s}, negative)
 }
 
 func (k *tetrad) manyWords(sum *binsum.Quadruple, negative bool) (f float64, ok bool) {
@@ -103,31 +114,42 @@ func (k *tetrad) manyWords(sum *binsum.Quadruple, negative bool) (f float64, ok 
 		return 0, false
 	}
 	words := sum.Sum()
-	high, low, exp, sign := words.Leading()
+	high, low, exp, minus := words.Leading()
 	if high == 0 {
 		return 0, true
 	}
-	s := dd.Scaled{Pair: dd.FromWords(high, low).Normal().Scale(0, sign != negative), Exp: exp}
-	return k.largeFront().Mul(s).Round(largeError)
+	return k.roundLarge(dd.Scaled{Pair: dd.FromWords(high, low).Normal().Scale(0, minus), Exp: exp}, negative)
 }
+
+// roundLarge rounds the product of the front from factorials and the sum.
+func (k *tetrad) roundLarge(sum dd.Scaled, negative bool) (f float64, ok bool) {
+	if f, ok = k.largeFront().Mul(sum).Round(largeError); negative {
+		f = -f
+	}
+	return f, ok
+}
+
+// How far M of the product of smallFront and the sum may be above and below that of the true value. Eight
+// entries of tables leave 1 each, in either direction; eight products and the sum, which are rounded down, 2
+// each; and 1 is for all that is of second order.
+const (
+	smallBelow = 8 + 1
+	smallAbove = 8 + 2*9 + 1
+)
 
 // smallFront returns Δ(aef) Δ(dbf) Δ(dec) / Δ(abc), each triangle coefficient by
 //
 //	Δ(abc)^2 = 1/[ (J+1) C(J, n1) C(J-n1, n2) ],    J = n1+n2+n3
-//
-// In units of u^2 the eight entries have errors of 19 each; four products of 1-pairs cost 7 each, two of
-// 3-pairs 25 each, that of the two 7-pairs 85, and that with the sum, 15*3, costs 85 with 2 for the sum
-// itself (dd.Pair.Mul): 404 in all with the 2 of the rounding, below 2^9 u^2 = 2^-97.
-func (k *tetrad) smallFront(s *binsum.Quadruple) dd.Pair {
-	d := dd.SqrtBinomials()
+func (k *tetrad) smallFront(s *binsum.Quadruple) mantissa.Number {
+	d := mantissa.SqrtBinomials()
 	front := d.RootNext[dd.Place(s.T, s.N1)].Mul(d.Root[dd.Place(k.c, s.N2)])
 	aef, dbf, dec := delta(d, s.S2, k.a, k.e), delta(d, s.S3, k.d, k.b), delta(d, s.S1, k.d, k.e)
 	return front.Mul(aef).Mul(dbf.Mul(dec))
 }
 
 // delta returns the triangle coefficient of three momenta that add up to j, the first two of them given as
-// twice their values, with an error of 45 u^2.
-func delta(d *dd.Binomials, j, x, y int) dd.Pair {
+// twice their values.
+func delta(d *mantissa.Binomials, j, x, y int) mantissa.Number {
 	return d.InverseNext[dd.Place(j, j-x)].Mul(d.Inverse[dd.Place(x, j-y)])
 }
 

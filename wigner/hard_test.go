@@ -9,7 +9,9 @@ import (
 	"strings"
 	"testing"
 
+	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/dd"
+	"example.org/couplet/internal/mantissa"
 	"example.org/couplet/internal/published"
 	"example.org/couplet/internal/verify"
 	"example.org/couplet/rational"
@@ -62,15 +64,19 @@ func searchHardCases(t *testing.T, draws int) {
 			continue
 		}
 		front := q.smallFront(false)
-		if front.Hi < 0x1p-126 {
+		if front.Words() > 2 {
 			continue
 		}
-		sum := q.sum()
-		if s := dd.FromMod128(sum.Mod128()); s.Hi != 0 {
-			p := front.Mul(s).Normal()
-			if h := verify.Hardness(p); found.Wants(h) {
-				found.Add(h, fmt.Sprintf("%d,%d,%d,%d,%d,%d", q[3]+q[6], q[4]+q[7], q[5]+q[8], q[6]-q[3], q[7]-q[4], q[8]-q[5]))
-			}
+		var sum binsum.Triple
+		q.sum(&sum)
+		high, low := sum.Mod128()
+		n, _ := mantissa.FromMod128(high, low)
+		if _, ok := front.Mul(n).Round(64, 64, 0); ok || n.M == 0 { // most are far from every boundary
+			continue
+		}
+		p := q.largeFront().Mul(dd.Scaled{Pair: dd.FromMod128(high, low).Normal()})
+		if h := verify.Hardness(p.Pair); found.Wants(h) {
+			found.Add(h, fmt.Sprintf("%d,%d,%d,%d,%d,%d", q[3]+q[6], q[4]+q[7], q[5]+q[8], q[6]-q[3], q[7]-q[4], q[8]-q[5]))
 		}
 	}
 	var out strings.Builder

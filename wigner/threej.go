@@ -165,10 +165,10 @@ func (r *regge) set(j1, j2, j3, m1, m2, m3 rational.Half) bool {
 // total returns J.
 func (r *regge) total() int { return r[0] + r[1] + r[2] }
 
-// sum returns the sum of DLMF (34.2.4). It has as many terms as the smallest entry of the square has
+// sum sets s to the sum of DLMF (34.2.4), in place: a copy of what was just written has to wait. It has as many terms as the smallest entry of the square has
 // units, and one.
-func (r *regge) sum() binsum.Triple {
-	return binsum.Triple{N1: r[2], N2: r[1], N3: r[0], A: r[3], B: r[7]}
+func (r *regge) sum(s *binsum.Triple) {
+	s.N1, s.N2, s.N3, s.A, s.B = r[2], r[1], r[0], r[3], r[7]
 }
 
 // parity returns n for the phase (-1)^n of the 3j symbol in the orientation of the square: j1-j2-m3, which
@@ -202,11 +202,13 @@ func (r *regge) image(i int) (q regge) {
 // shortest returns the image whose sum needs the fewest bits. Where one momentum is small beside the
 // others, or a projection close to the largest, that is a few bits instead of some j1+j2+j3.
 func (r *regge) shortest() regge {
-	best, sum := *r, r.sum()
+	best := *r
+	var sum binsum.Triple
+	r.sum(&sum)
 	least := sum.Bits()
 	for i := 1; i < 6; i++ {
 		image := r.image(i)
-		sum = image.sum()
+		image.sum(&sum)
 		if bits := sum.Bits(); bits < least {
 			best, least = image, bits
 		}
@@ -237,7 +239,8 @@ func (r *regge) exactBy(image *regge, coefficient bool) rational.Surd {
 	if coefficient {
 		front.MulInt(r.twiceJ3()+1, 1)
 	}
-	sum := image.sum()
+	var sum binsum.Triple
+	image.sum(&sum)
 	v := sum.Sqrt(&front)
 	if r.sign(image, coefficient) != 0 {
 		return v.Neg()

@@ -4,7 +4,9 @@ import (
 	"sync/atomic"
 
 	"example.org/couplet/internal/argument"
+	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/dd"
+	"example.org/couplet/internal/mantissa"
 	"example.org/couplet/rational"
 )
 
@@ -35,11 +37,8 @@ func ClebschGordanFloat(j1, m1, j2, m2, j, m rational.Half) float64 {
 	return r.float(true)
 }
 
-// Bounds on the relative error before rounding, derived at smallFront and largeFront.
-const (
-	smallError = 0x1p-97
-	largeError = 0x1p-98
-)
+// largeError bounds the relative error before rounding, derived at largeFront.
+const largeError = 0x1p-98
 
 // rowTotal is the J beyond which the row, in time proportional to J, is faster than the sum; a calibration.
 const rowTotal = 6000
@@ -47,16 +46,14 @@ const rowTotal = 6000
 // fallbacks counts the values that only the exact route could round.
 var fallbacks atomic.Int64
 
-// float returns the value: the front in double-double times the integer sum, which is exact, rounded
-// where the error bound allows, and by the exact route elsewhere.
+// float returns the value: the integer sum, exact or its leading bits, times the front, rounded where the error
+// bound allows, in 64 bits first and then in double-double, and by the exact route elsewhere.
 func (r *regge) float(coefficient bool) float64 {
 	var f float64
 	var ok bool
 	total := r.total()
-	if total <= 66 { // |S| <= C(66, 33) < 2^63, see binsum.Triple
-		f, ok = r.oneWord(coefficient)
-	} else if total < dd.BinomialTops {
-		f, ok = r.twoWords(coefficient)
+	if total < dd.BinomialTops {
+		f, ok = r.fewWords(coefficient)
 	} else if total > rowTotal && total <= argument.MostInRow { // no 2j exceeds J
 		f, ok = r.byRow(coefficient)
 	}
@@ -70,31 +67,36 @@ func (r *regge) float(coefficient bool) float64 {
 	return r.exact(coefficient).Float64()
 }
 
-func (r *regge) oneWord(coefficient bool) (f float64, ok bool) {
-	sum := r.sum()
-	s := int64(sum.Mod64())
-	if s == 0 {
-		return 0, true
+// fewWords is the route for symbols whose binomials are in the tables; ok is false, too, where two words are not
+// sure to hold the sum. No symbol exceeds 1, so that |S| <= 1/front.
+func (r *regge) fewWords(coefficient bool) (f float64, ok bool) {
+	var sum binsum.Triple
+	r.sum(&sum)
+	sign := uint64(r.sign(r, coefficient))
+	if r.total() <= 66 { // |S| <= C(66, 33) < 2^63, see binsum.Triple
+		s := sum.Mod64()
+		if s == 0 {
+			return 0, true
+		}
+		n, minus := mantissa.FromMod64(s)
+		if f, ok = r.smallFront(coefficient).Mul(n).Round(smallBelow, smallAbove, sign^minus); ok {
+			return f, ok
+		}
+		return r.roundLarge(r, dd.Scaled{Pair: dd.FromInt64(int64(s))}, coefficient)
 	}
-	if r.sign(r, coefficient) != 0 {
-		s = -s
-	}
-	return r.smallFront(coefficient).Mul(dd.FromInt64(s)).Round(smallError)
-}
-
-// twoWords returns ok = false, too, where two words are not sure to hold the sum. No symbol exceeds 1, so that
-// |S| <= 1/front.
-func (r *regge) twoWords(coefficient bool) (f float64, ok bool) {
 	front := r.smallFront(coefficient)
-	if front.Hi < 0x1p-126 {
+	if front.Words() > 2 {
 		return 0, false
 	}
-	sum := r.sum()
-	s := dd.FromMod128(sum.Mod128())
-	if s.Hi == 0 {
+	high, low := sum.Mod128()
+	if high|low == 0 {
 		return 0, true
 	}
-	return front.Mul(s.Scale(0, r.sign(r, coefficient) != 0)).Round(smallError)
+	n, minus := mantissa.FromMod128(high, low)
+	if f, ok = front.Mul(n).Round(smallBelow, smallAbove, sign^minus); ok {
+		return f, ok
+	}
+	return r.roundLarge(r, dd.Scaled{Pair: dd.FromMod128(high, low).Normal()}, coefficient)
 }
 
 func (r *regge) manyWords(coefficient bool) (f float64, ok bool) {
@@ -102,22 +104,35 @@ func (r *regge) manyWords(coefficient bool) (f float64, ok bool) {
 		return 0, false
 	}
 	image := r.shortest()
-	sum := image.sum()
+	var sum binsum.Triple
+	image.sum(&sum)
 	words := sum.Sum()
 	high, low, exp, negative := words.Leading()
 	if high == 0 {
 		return 0, true
 	}
-	s := dd.Scaled{Pair: dd.FromWords(high, low).Normal(), Exp: exp}
+	return r.roundLarge(&image, dd.Scaled{Pair: dd.FromWords(high, low).Normal().Scale(0, negative), Exp: exp}, coefficient)
+}
+
+// roundLarge rounds the product of the front from factorials and the sum of an image of r.
+func (r *regge) roundLarge(image *regge, sum dd.Scaled, coefficient bool) (f float64, ok bool) {
 	front := image.largeFront()
 	if coefficient {
 		front = front.Mul(dd.Scaled{Pair: dd.Factorials(r.total() + 1).Sqrt[r.twiceJ3()+1]})
 	}
-	if f, ok = front.Mul(s).Round(largeError); negative != (r.sign(&image, coefficient) != 0) {
+	if f, ok = front.Mul(sum).Round(largeError); r.sign(image, coefficient) != 0 {
 		f = -f
 	}
 	return f, ok
 }
+
+// How far M of the product of smallFront and the sum may be above and below that of the true value. Seven entries
+// of tables leave 1 each, in either direction; seven products and the sum, which are rounded down, 2 each; and
+// 1 is for all that is of second order.
+const (
+	smallBelow = 7 + 1
+	smallAbove = 7 + 2*8 + 1
+)
 
 // smallFront returns the square root of
 //
@@ -125,21 +140,16 @@ func (r *regge) manyWords(coefficient bool) (f float64, ok bool) {
 //	  = C(2j1, n1) C(2j2, n1) / [ (J+1) C(J, n1) C(2j1, j1+m1) C(2j2, j2+m2) C(2j3, j3+m3) ]
 //
 // times 2j3+1 for a Clebsch-Gordan coefficient.
-//
-// In units of u^2 the six entries have errors of 19 each, sqrt(2j3+1) of 1; the products of 1-pairs cost 7
-// each, w*sqrt = 3*1 costs 13, v*w = 3*5 costs 37, u*(vw) = 3*9 costs 61, and the product with the sum, 13*3,
-// costs 75 with 2 more for the sum itself (dd.Pair.Mul): 326 in all with the 2 of the rounding, below
-// 2^9 u^2 = 2^-97.
-func (r *regge) smallFront(coefficient bool) dd.Pair {
-	d := dd.SqrtBinomials()
+func (r *regge) smallFront(coefficient bool) mantissa.Number {
+	d := mantissa.SqrtBinomials()
 	n3, n2, n1 := r[0], r[1], r[2]
 	u := d.Root[dd.Place(n1+n2, n1)].Mul(d.Root[dd.Place(n1+n3, n1)])
 	v := d.Inverse[dd.Place(n1+n2, r[3])].Mul(d.Inverse[dd.Place(n1+n3, r[4])])
 	w := d.Inverse[dd.Place(n2+n3, r[5])].Mul(d.InverseNext[dd.Place(n1+n2+n3, n1)])
 	if coefficient {
-		w = w.Mul(dd.Factorials(dd.BinomialTops).Sqrt[n2+n3+1])
+		w = w.Mul(d.Sqrt[n2+n3+1])
 	}
-	return u.Mul(v.Mul(w))
+	return u.Mul(v).Mul(w)
 }
 
 // largeFront returns the square root of the same quotient of factorials. It and sqrt(2j3+1) are eleven

@@ -204,18 +204,65 @@ func TestTables(t *testing.T) {
 	if worst > 1 {
 		t.Errorf("factorials: error %.2f u^2, bound 1", worst)
 	}
-	b := SqrtBinomials()
+	b := Binomials()
 	worst = 0
 	for n := range BinomialTops {
 		for k := range n + 1 {
 			c := new(big.Int).Binomial(int64(n), int64(k))
-			w, next := root(c), root(new(big.Int).Mul(c, big.NewInt(int64(n+1))))
-			i := Place(n, k)
-			worst = max(worst, units(b.Root[i], w), units(b.Inverse[i], inverse(w)), units(b.RootNext[i], next), units(b.InverseNext[i], inverse(next)))
+			off := units(b[Place(n, k)], new(big.Float).SetPrec(bigPrec).SetInt(c))
+			if off != 0 && c.BitLen() <= 104 {
+				t.Fatalf("C(%d, %d) is not exact", n, k)
+			}
+			worst = max(worst, off)
 		}
 	}
 	t.Logf("binomials: largest error %.1f u^2 of %d", worst, BinomialError)
-	if worst > BinomialError || worst < BinomialError/16 {
+	if worst > BinomialError || worst == 0 {
 		t.Error("the bound is wrong")
+	}
+}
+
+// Times and Add keep within their bounds, and Add is exact for integers.
+func TestTimesAndAdd(t *testing.T) {
+	r := rand.New(rand.NewPCG(35, 35))
+	worstTimes, worstAdd := 0.0, 0.0
+	for range 200000 {
+		const c = 3
+		x, y := drawPair(r, c), drawPair(r, c)
+		k := []float64{1, -1, -0x1p-3, 0x1p-60}[r.IntN(4)]
+		y.Hi, y.Lo = y.Hi*k, y.Lo*k
+		f := float64(1 + r.IntN(1<<30))
+		worstTimes = max(worstTimes, units(x.Times(f), x.big().Mul(x.big(), big.NewFloat(f)))/(2*c+1))
+		sum := x.Add(y)
+		d, _ := new(big.Float).Sub(sum.big(), new(big.Float).Add(x.big(), y.big())).Float64()
+		worstAdd = max(worstAdd, math.Abs(d)*0x1p106/(4*c+2)/max(math.Abs(x.Hi), math.Abs(y.Hi)))
+		if sum.Hi != sum.Hi+sum.Lo {
+			t.Fatalf("%v is not in normal form", sum)
+		}
+	}
+	if worstTimes > 1 || worstTimes < 1.0/16 || worstAdd > 1 || worstAdd < 1.0/16 {
+		t.Errorf("errors up to %.3f and %.3f of the bounds", worstTimes, worstAdd)
+	}
+	for range 200000 {
+		draw := func() (Pair, *big.Int) {
+			n := new(big.Int).Lsh(big.NewInt(r.Int64N(1<<62)), uint(r.IntN(42)))
+			n.Add(n, big.NewInt(r.Int64()))
+			if r.IntN(2) == 0 {
+				n.Neg(n)
+			}
+			hi, _ := new(big.Float).SetInt(n).Float64()
+			rest, _ := big.NewFloat(hi).Int(nil)
+			lo, _ := new(big.Float).SetInt(rest.Sub(n, rest)).Float64()
+			return Pair{hi, lo}, n
+		}
+		x, m := draw()
+		y, n := draw()
+		if r.IntN(3) == 0 { // cancel nearly
+			y, n = Pair{-x.Hi, -x.Lo + float64(r.IntN(3))}, new(big.Int).Neg(m)
+			n.Add(n, big.NewInt(int64(y.Lo+x.Lo)))
+		}
+		if sum := x.Add(y); sum.big().Cmp(new(big.Float).SetPrec(bigPrec).SetInt(m.Add(m, n))) != 0 {
+			t.Fatalf("%v + %v = %v is not exact", x, y, sum)
+		}
 	}
 }

@@ -8,6 +8,7 @@ import (
 	"testing"
 
 	"example.org/couplet/internal/dd"
+	"example.org/couplet/internal/mantissa"
 	"example.org/couplet/rational"
 )
 
@@ -29,6 +30,18 @@ func Relative(p dd.Pair, exp int, want *big.Float) float64 {
 	got.SetMantExp(got, exp)
 	f, _ := got.Sub(got, want).Quo(got, want).Float64()
 	return math.Abs(f)
+}
+
+// Big returns the number.
+func Big(a mantissa.Number) *big.Float {
+	return new(big.Float).SetMantExp(new(big.Float).SetPrec(300).SetUint64(a.M), a.Exp)
+}
+
+// Off returns by how much M is above that of the wanted number.
+func Off(a mantissa.Number, want *big.Float) float64 {
+	d := new(big.Float).Sub(Big(a), want)
+	f, _ := d.SetMantExp(d, -a.Exp).Float64()
+	return f
 }
 
 // The bounds that ThreeJRow and SixJRow state.
