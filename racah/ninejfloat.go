@@ -190,7 +190,10 @@ const (
 // dd.BinomialTops.
 func nineJSmallFront(t *square.Array) mantissa.Number {
 	d := mantissa.SqrtBinomials()
-	triad := func(x, y, z int) mantissa.Number { return delta(d, (x+y+z)>>1, x, y) }
+	triad := func(x, y, z int) mantissa.Number {
+		j := (x + y + z) >> 1
+		return delta(d, j, j-x, x, j-y)
+	}
 	rows := triad(t[0], t[1], t[2]).Mul(triad(t[3], t[4], t[5])).Mul(triad(t[6], t[7], t[8]))
 	return rows.Mul(triad(t[0], t[3], t[6]).Mul(triad(t[1], t[4], t[7])).Mul(triad(t[2], t[5], t[8])))
 }

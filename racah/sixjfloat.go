@@ -143,14 +143,16 @@ const (
 func (k *tetrad) smallFront(s *binsum.Quadruple) mantissa.Number {
 	d := mantissa.SqrtBinomials()
 	front := d.RootNext[dd.Place(s.T, s.N1)].Mul(d.Root[dd.Place(k.c, s.N2)])
-	aef, dbf, dec := delta(d, s.S2, k.a, k.e), delta(d, s.S3, k.d, k.b), delta(d, s.S1, k.d, k.e)
+	aef := delta(d, s.S2, s.S2-k.a, k.a, s.S2-k.e)
+	dbf := delta(d, s.S3, s.S3-k.d, k.d, s.S3-k.b)
+	dec := delta(d, s.S1, s.S1-k.d, k.d, s.S1-k.e)
 	return front.Mul(aef).Mul(dbf.Mul(dec))
 }
 
-// delta returns the triangle coefficient of three momenta that add up to j, the first two of them given as
-// twice their values.
-func delta(d *mantissa.Binomials, j, x, y int) mantissa.Number {
-	return d.InverseNext[dd.Place(j, j-x)].Mul(d.Inverse[dd.Place(x, j-y)])
+// delta returns the triangle coefficient of three momenta x/2, y/2, z/2 that add up to j, with a = j-x and
+// b = j-y; without the subtractions it is small enough to be inlined.
+func delta(d *mantissa.Binomials, j, a, x, b int) mantissa.Number {
+	return d.InverseNext[dd.Place(j, a)].Mul(d.Inverse[dd.Place(x, b)])
 }
 
 // top returns the largest number whose factorial is in the symbol.

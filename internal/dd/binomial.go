@@ -9,7 +9,7 @@ const BinomialTops = 156
 const Places = BinomialTops * (BinomialTops + 1) / 2
 
 // Place returns the place of C(n, k), 0 <= k <= n < BinomialTops.
-func Place(n, k int) int { return n*(n+1)/2 + k }
+func Place(n, k int) int { return n*(n+1)>>1 + k }
 
 // BinomialError bounds the relative errors of [Binomials], in units of u^2: six for each of less than 50
 // additions of numbers that are not exact.

@@ -12,7 +12,7 @@ import (
 const prec = 300
 
 func (a Number) big() *big.Float {
-	return new(big.Float).SetMantExp(new(big.Float).SetPrec(prec).SetUint64(a.M), a.Exp)
+	return new(big.Float).SetMantExp(new(big.Float).SetPrec(prec).SetUint64(a.M), a.Exp-63)
 }
 
 // units returns the relative error of a in units of 2^-64, positive where a is too large.
@@ -136,7 +136,7 @@ func TestRound(t *testing.T) {
 		}
 		at := func(d float64) float64 {
 			v := a.big()
-			v.Add(v, new(big.Float).SetMantExp(big.NewFloat(d), a.Exp))
+			v.Add(v, new(big.Float).SetMantExp(big.NewFloat(d), a.Exp-63))
 			g, _ := v.Float64()
 			return g
 		}

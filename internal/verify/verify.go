@@ -34,13 +34,13 @@ func Relative(p dd.Pair, exp int, want *big.Float) float64 {
 
 // Big returns the number.
 func Big(a mantissa.Number) *big.Float {
-	return new(big.Float).SetMantExp(new(big.Float).SetPrec(300).SetUint64(a.M), a.Exp)
+	return new(big.Float).SetMantExp(new(big.Float).SetPrec(300).SetUint64(a.M), a.Exp-63)
 }
 
 // Off returns by how much M is above that of the wanted number.
 func Off(a mantissa.Number, want *big.Float) float64 {
 	d := new(big.Float).Sub(Big(a), want)
-	f, _ := d.SetMantExp(d, -a.Exp).Float64()
+	f, _ := d.SetMantExp(d, 63-a.Exp).Float64()
 	return f
 }
 
