@@ -9,7 +9,6 @@ import (
 	"strings"
 	"testing"
 
-	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/dd"
 	"example.org/couplet/internal/mantissa"
 	"example.org/couplet/internal/published"
@@ -80,21 +79,22 @@ func drawHardSixJ(r *rand.Rand) (q []int, p dd.Pair, ok bool) {
 	c, f := r.IntN(40), r.IntN(40)
 	b, e := r.IntN(c+1), r.IntN(f+1)
 	k := canonical(r.IntN(20), b, c, r.IntN(e+1), e, f)
-	var sum binsum.Quadruple
-	k.sum(&sum)
-	if !sum.Fits() {
+	if !k.Fits() || k.T >= dd.BinomialTops {
 		return nil, p, false
 	}
-	front := k.smallFront(&sum)
+	front := k.smallFront()
 	if front.Words() > 2 {
 		return nil, p, false
 	}
-	high, low := sum.Mod128()
+	high, low := k.Mod128()
 	n, _ := mantissa.FromMod128(high, low)
 	if _, ok := front.Mul(n).Round(64, 64, 0); ok || n.M == 0 { // most are far from every boundary
 		return nil, p, false
 	}
-	return []int{k.a, k.b, k.c, k.d, k.e, k.f}, k.largeFront().Mul(dd.Scaled{Pair: dd.FromMod128(high, low).Normal()}).Pair, true
+	s, q1, q2, q3 := [4]int{k.T, k.S2, k.S3, k.S1}, k.N1+k.S1, k.N2+k.S2, k.N3+k.S3
+	// The triads (abc), (aef), (dbf), (dec): each pair has a momentum in common, and the columns of all but it.
+	q = []int{s[0] + s[1] - q2, s[0] + s[2] - q3, s[0] + s[3] - q1, s[2] + s[3] - q2, s[1] + s[3] - q3, s[1] + s[2] - q1}
+	return q, k.largeFront().Mul(dd.Scaled{Pair: dd.FromMod128(high, low).Normal()}).Pair, true
 }
 
 func drawHardNineJ(r *rand.Rand) (q []int, p dd.Pair, ok bool) {

@@ -142,7 +142,8 @@ func nineJShortest(t *square.Array) (best square.Array, negative bool) {
 func nineJExact(t *square.Array) rational.Surd {
 	var f rational.Factored
 	for _, p := range &nineJTriads {
-		mulTriangle(&f, t[p[0]], t[p[1]], t[p[2]], 1)
+		x, y, z := t[p[0]], t[p[1]], t[p[2]]
+		mulTriangle(&f, (x+y-z)/2, (y+z-x)/2, (z+x-y)/2, 1)
 	}
 	if z, ok := nineJWord(t); ok {
 		return f.SqrtTimes(z)
@@ -165,9 +166,9 @@ func nineJRange(t *square.Array) (first, last int) {
 func nineJFactors(t *square.Array, x int) [3]tetrad {
 	a, b, c, d, e, f, g, h, i := t[0], t[1], t[2], t[3], t[4], t[5], t[6], t[7], t[8]
 	return [3]tetrad{
-		{a, i, x, f, b, c}, // { a b c; f i x } with its triad (a i x) in front
-		{b, x, f, d, e, h}, // { d e f; b x h } with (b x f)
-		{x, h, d, g, a, i}, // { g h i; x a d } with (x h d)
+		newTetrad(a, i, x, f, b, c), // { a b c; f i x } with its triad (a i x) in front
+		newTetrad(b, x, f, d, e, h), // { d e f; b x h } with (b x f)
+		newTetrad(x, h, d, g, a, i), // { g h i; x a d } with (x h d)
 	}
 }
 
@@ -178,7 +179,7 @@ func nineJSum(t *square.Array, room *binsum.ProductRoom) (sum []big.Word, negati
 	sum, negative = binsum.SumOfProducts((last-first)/2+1, func(i int) (w uint, s [3]binsum.Quadruple) {
 		x := first + 2*i
 		for i, k := range nineJFactors(t, x) {
-			k.sum(&s[i])
+			s[i] = k.Quadruple
 		}
 		return uint(x + 1), s
 	}, room)
@@ -189,12 +190,10 @@ func nineJSum(t *square.Array, room *binsum.ProductRoom) (sum []big.Word, negati
 func nineJWord(t *square.Array) (z int64, ok bool) {
 	first, last := nineJRange(t)
 	room := 63 - bits.Len(uint((last+1)*((last-first)/2+1))) // for the product of three sums
-	var s binsum.Quadruple
 	for x := first; x <= last; x += 2 {
 		term, left := int64(x+1), room
 		for _, k := range nineJFactors(t, x) {
-			k.sum(&s)
-			v, ok := s.Word()
+			v, ok := k.Word()
 			if left -= bits.Len64(uint64(max(v, -v))); !ok || left < 0 {
 				return 0, false
 			}

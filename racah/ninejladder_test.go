@@ -29,10 +29,8 @@ func compareLadder(t *testing.T, p, q, r, s, u int) (exact bool, worst float64, 
 	exact = l.words(words)
 	l.pairs(pairs)
 	for i := range words {
-		k := tetrad{p, q, l.first + 2*i, r, s, u}
-		var sum binsum.Quadruple
-		k.sum(&sum)
-		want := new(big.Float).SetPrec(2000).SetInt(sum.Int(new(big.Int)))
+		k := newTetrad(p, q, l.first+2*i, r, s, u)
+		want := new(big.Float).SetPrec(2000).SetInt(k.Int(new(big.Int)))
 		if exact && want.Cmp(big.NewFloat(words[i])) != 0 {
 			t.Fatalf("%+v: %.0f in words, want %.0f", k, words[i], want)
 		}

@@ -114,13 +114,14 @@ func forbidden(fn string, names *[6]string, j1, j2, j3, l1, l2, l3 rational.Half
 	}
 }
 
-// tetrad holds twice the arguments of an allowed 6j symbol {a b c; d e f}, the triad abc being the
-// one that its sum treats apart.
-type tetrad struct{ a, b, c, d, e, f int }
+// tetrad is an allowed 6j symbol as its sum sees it. T, S1, S2, S3 are the sums of the four triads, T that of the
+// one that is treated apart, in front; N1+S1, N2+S2, N3+S3 are those of the pairs of columns. With another
+// triad in front the four change places, and the sums of the columns stay.
+type tetrad struct{ binsum.Quadruple }
 
-// set takes the symbol {j1 j2 j3; l1 l2 l3}, with the triad of the largest sum for abc: the sum then
-// starts at t = a+b+c, where its first binomial is 1, and stays smallest. It returns false for a symbol
-// that a selection rule forbids and for a negative argument.
+// set takes the symbol {j1 j2 j3; l1 l2 l3}, with the triad of the largest sum in front: the sum then starts at
+// t = T, where its first binomial is 1, and stays smallest. It returns false for a symbol that a selection
+// rule forbids and for a negative argument.
 func (k *tetrad) set(j1, j2, j3, l1, l2, l3 rational.Half) bool {
 	// 64 bits hold the sums of Halves on every platform.
 	a, b, c := int64(j1.Twice()), int64(j2.Twice()), int64(j3.Twice())
@@ -130,48 +131,60 @@ func (k *tetrad) set(j1, j2, j3, l1, l2, l3 rational.Half) bool {
 		(dbf-2*d)|(dbf-2*b)|(dbf-2*f)|(dec-2*d)|(dec-2*e)|(dec-2*c) < 0 || (abc|aef|dbf|dec)&1 != 0 {
 		return false
 	}
-	// Turning two columns upside down puts another triad in front. The choice is random to a processor:
-	// a table is faster than a branch.
-	best, most := 0, abc
+	// The choice is random to a processor: a table is faster than a branch.
+	front, most := 0, abc
 	if aef > most {
-		best, most = 1, aef
+		front, most = 1, aef
 	}
 	if dbf > most {
-		best, most = 2, dbf
+		front, most = 2, dbf
 	}
 	if dec > most {
-		best = 3
+		front = 3
 	}
-	j, p := [8]int64{a, b, c, d, e, f}, &sixJOrders[best]
-	k.a, k.b, k.c = int(j[p[0]&7]), int(j[p[1]&7]), int(j[p[2]&7])
-	k.d, k.e, k.f = int(j[p[3]&7]), int(j[p[4]&7]), int(j[p[5]&7])
+	s := [4]int{int(abc >> 1), int(aef >> 1), int(dbf >> 1), int(dec >> 1)}
+	k.place(&s, front, int((a+b+d+e)>>1), int((b+c+e+f)>>1), int((a+c+d+f)>>1))
 	return true
 }
 
-// sixJOrders are the places of the arguments when each of the four triads stands in front.
-var sixJOrders = [4][6]uint8{
-	{0, 1, 2, 3, 4, 5},
-	{0, 4, 5, 3, 1, 2},
-	{3, 1, 5, 0, 4, 2},
-	{3, 4, 2, 0, 1, 5},
+// place sets k from the sums of the triads (abc), (aef), (dbf), (dec), the one with the given index in front,
+// and those of the columns 1 and 2, 2 and 3, 1 and 3. A pair of columns is opposite to a momentum, say c for
+// the first pair. With abc in front S1 is dec, the other triad with c; aef and dbf are paired alike, and
+// exclusive or finds the partner.
+func (k *tetrad) place(s *[4]int, front, q1, q2, q3 int) {
+	k.T, k.S1, k.S2, k.S3 = s[front&3], s[front&3^3], s[front&3^1], s[front&3^2]
+	k.N1, k.N2, k.N3 = q1-k.S1, q2-k.S2, q3-k.S3
+}
+
+// newTetrad returns the allowed symbol {a b c; d e f}, from twice its arguments, with abc in front.
+func newTetrad(a, b, c, d, e, f int) (k tetrad) {
+	k.place(&[4]int{(a + b + c) >> 1, (a + e + f) >> 1, (d + b + f) >> 1, (d + e + c) >> 1}, 0,
+		(a+b+d+e)>>1, (b+c+e+f)>>1, (a+c+d+f)>>1)
+	return k
+}
+
+// triads returns the numbers that the four triangle coefficients depend on: the sum of a triad and the three by
+// which two momenta exceed the third. Each of the latter is the sum of two columns less that of a triad, as
+// N1 to N3 are. The triad in front comes first.
+func (k *tetrad) triads() [4][4]int {
+	q1, q2, q3 := k.N1+k.S1, k.N2+k.S2, k.N3+k.S3
+	return [4][4]int{
+		{k.T, k.N1, k.N2, k.N3},
+		{k.S1, q1 - k.T, q2 - k.S3, q3 - k.S2},
+		{k.S2, q1 - k.S3, q2 - k.T, q3 - k.S1},
+		{k.S3, q1 - k.S2, q2 - k.S1, q3 - k.T},
+	}
 }
 
 // exact returns the value.
 func (k *tetrad) exact() rational.Surd {
 	var front rational.Factored // squared
-	mulTriangle(&front, k.a, k.b, k.c, -1)
-	mulTriangle(&front, k.a, k.e, k.f, 1)
-	mulTriangle(&front, k.d, k.b, k.f, 1)
-	mulTriangle(&front, k.d, k.e, k.c, 1)
-	var sum binsum.Quadruple
-	k.sum(&sum)
-	return sum.Sqrt(&front)
-}
-
-// sum sets s to Racah's sum as in the doc of SixJ.
-func (k *tetrad) sum(s *binsum.Quadruple) {
-	s.T = (k.a + k.b + k.c) >> 1
-	s.N1, s.S1 = (k.a+k.b-k.c)>>1, (k.d+k.e+k.c)>>1
-	s.N2, s.S2 = (k.b+k.c-k.a)>>1, (k.a+k.e+k.f)>>1
-	s.N3, s.S3 = (k.c+k.a-k.b)>>1, (k.d+k.b+k.f)>>1
+	for i, t := range k.triads() {
+		power := 1
+		if i == 0 {
+			power = -1
+		}
+		mulTriangle(&front, t[1], t[2], t[3], power)
+	}
+	return k.Sqrt(&front)
 }

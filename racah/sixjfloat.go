@@ -3,7 +3,6 @@ package racah
 import (
 	"sync/atomic"
 
-	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/dd"
 	"example.org/couplet/internal/mantissa"
 	"example.org/couplet/rational"
@@ -49,14 +48,12 @@ var fallbacks atomic.Int64
 // float returns the value, or its negative: the integer sum, exact or its leading bits, times the front, rounded
 // where the error bound allows, in 64 bits first and then in double-double, and by the exact route elsewhere.
 func (k *tetrad) float(negative bool) float64 {
-	var sum binsum.Quadruple
-	k.sum(&sum)
 	f, ok := 0.0, false
-	if sum.Fits() && sum.T < dd.BinomialTops { // no triad is larger
-		f, ok = k.fewWords(&sum, negative)
+	if k.Fits() && k.T < dd.BinomialTops { // no triad is larger
+		f, ok = k.fewWords(negative)
 	}
 	if !ok {
-		f, ok = k.manyWords(&sum, negative)
+		f, ok = k.manyWords(negative)
 	}
 	if ok {
 		return f
@@ -71,18 +68,18 @@ func (k *tetrad) float(negative bool) float64 {
 
 // fewWords is the route for symbols whose binomials are in the tables; ok is false, too, where three words are
 // not sure to hold the sum. No symbol exceeds 1, so that |S| <= 1/front.
-func (k *tetrad) fewWords(sum *binsum.Quadruple, negative bool) (f float64, ok bool) {
-	front := k.smallFront(sum)
+func (k *tetrad) fewWords(negative bool) (f float64, ok bool) {
+	front := k.smallFront()
 	var n mantissa.Number
 	var sign uint64
 	words := front.Words()
 	switch words {
 	case 1:
-		n, sign = mantissa.FromMod64(sum.Mod64())
+		n, sign = mantissa.FromMod64(k.Mod64())
 	case 2:
-		n, sign = mantissa.FromMod128(sum.Mod128())
+		n, sign = mantissa.FromMod128(k.Mod128())
 	default:
-		w, ok := sum.Mod192()
+		w, ok := k.Mod192()
 		if words > 3 || !ok {
 			return 0, false
 		}
@@ -100,21 +97,21 @@ func (k *tetrad) fewWords(sum *binsum.Quadruple, negative bool) (f float64, ok b
 	var s dd.Pair
 	switch words {
 	case 1:
-		s = dd.FromInt64(int64(sum.Mod64()))
+		s = dd.FromInt64(int64(k.Mod64()))
 	case 2:
-		s = dd.FromMod128(sum.Mod128()).Normal()
+		s = dd.FromMod128(k.Mod128()).Normal()
 	default:
 		return 0, false
 	}
 	return k.roundLarge(dd.Scaled{Pair: s}, negative)
 }
 
-func (k *tetrad) manyWords(sum *binsum.Quadruple, negative bool) (f float64, ok bool) {
+func (k *tetrad) manyWords(negative bool) (f float64, ok bool) {
 	if k.top() > dd.MostFactorials {
 		return 0, false
 	}
-	words := sum.Sum()
-	high, low, exp, minus := words.Leading()
+	sum := k.Sum()
+	high, low, exp, minus := sum.Leading()
 	if high == 0 {
 		return 0, true
 	}
@@ -137,41 +134,42 @@ const (
 	smallAbove = 8 + 2*9 + 1
 )
 
-// smallFront returns Δ(aef) Δ(dbf) Δ(dec) / Δ(abc), each triangle coefficient by
+// smallFront returns the triangle coefficients of three triads divided by that of the one in front, each by
 //
 //	Δ(abc)^2 = 1/[ (J+1) C(J, n1) C(J-n1, n2) ],    J = n1+n2+n3
-func (k *tetrad) smallFront(s *binsum.Quadruple) mantissa.Number {
+//
+// with the numbers of triads.
+func (k *tetrad) smallFront() mantissa.Number {
 	d := mantissa.SqrtBinomials()
-	front := d.RootNext[dd.Place(s.T, s.N1)].Mul(d.Root[dd.Place(k.c, s.N2)])
-	aef := delta(d, s.S2, s.S2-k.a, k.a, s.S2-k.e)
-	dbf := delta(d, s.S3, s.S3-k.d, k.d, s.S3-k.b)
-	dec := delta(d, s.S1, s.S1-k.d, k.d, s.S1-k.e)
-	return front.Mul(aef).Mul(dbf.Mul(dec))
+	q1, q2, q3 := k.N1+k.S1, k.N2+k.S2, k.N3+k.S3
+	front := d.RootNext[dd.Place(k.T, k.N1)].Mul(d.Root[dd.Place(k.N2+k.N3, k.N2)])
+	first := delta(d, k.S1, q1-k.T, k.S1-(q1-k.T), q2-k.S3)
+	second := delta(d, k.S2, q2-k.T, k.S2-(q2-k.T), q1-k.S3)
+	third := delta(d, k.S3, q3-k.T, k.S3-(q3-k.T), q1-k.S2)
+	return front.Mul(first).Mul(second.Mul(third))
 }
 
-// delta returns the triangle coefficient of three momenta x/2, y/2, z/2 that add up to j, with a = j-x and
-// b = j-y; without the subtractions it is small enough to be inlined.
-func delta(d *mantissa.Binomials, j, a, x, b int) mantissa.Number {
-	return d.InverseNext[dd.Place(j, a)].Mul(d.Inverse[dd.Place(x, b)])
+// delta returns the triangle coefficient of a triad that adds up to j, x and y being two of its excesses, and
+// rest = j-x: without the subtraction it is small enough to be inlined.
+func delta(d *mantissa.Binomials, j, x, rest, y int) mantissa.Number {
+	return d.InverseNext[dd.Place(j, x)].Mul(d.Inverse[dd.Place(rest, y)])
 }
 
 // top returns the largest number whose factorial is in the symbol.
-func (k *tetrad) top() int {
-	return max(k.a+k.b+k.c, k.a+k.e+k.f, k.d+k.b+k.f, k.d+k.e+k.c)/2 + 1
-}
+func (k *tetrad) top() int { return max(k.T, k.S1, k.S2, k.S3) + 1 }
 
 // largeFront returns the same front from factorials: sixteen factors with an error of u^2, and sixteen
 // multiplications, that of the sum among them, with 5 u^2. With 2 for the sum and 2 for the rounding
 // that is below 2^7 u^2 = 2^-99.
 func (k *tetrad) largeFront() dd.Scaled {
-	t := dd.Factorials(k.top())
+	table := dd.Factorials(k.top())
 	z := dd.Scaled{Pair: dd.Pair{Hi: 1}}
-	triangle := func(up, down []dd.Scaled, x, y, w int) {
-		z = z.Mul(up[(x+y-w)/2]).Mul(up[(y+w-x)/2]).Mul(up[(w+x-y)/2]).Mul(down[(x+y+w)/2+1])
+	for i, t := range k.triads() {
+		up, down := table.Root, table.Inverse
+		if i == 0 {
+			up, down = down, up
+		}
+		z = z.Mul(up[t[1]]).Mul(up[t[2]]).Mul(up[t[3]]).Mul(down[t[0]+1])
 	}
-	triangle(t.Inverse, t.Root, k.a, k.b, k.c)
-	triangle(t.Root, t.Inverse, k.a, k.e, k.f)
-	triangle(t.Root, t.Inverse, k.d, k.b, k.f)
-	triangle(t.Root, t.Inverse, k.d, k.e, k.c)
 	return z
 }

@@ -6,6 +6,7 @@ import (
 	"sync"
 	"sync/atomic"
 
+	"example.org/couplet/internal/binsum"
 	"example.org/couplet/rational"
 )
 
@@ -71,11 +72,7 @@ func canonical(a, b, c, d, e, f int) tetrad {
 	s4 := 3*a + b + c + d + e + f
 	s1, s2, s3 := s4-f, s4-e, s4-d
 	q1, q2, q3 := s4+a, s4+a+b, s4+a+c
-	// j1+j2+j3 = s1, j1+l2+l3 = s2, l1+j2+l3 = s3, l1+l2+j3 = s4; columns 1 and 2 add up to q1, and so on.
-	j3, l3 := s1+s4-q1, s2+s3-q1 // twice: (s1+s4) - q1 = 2 j3, as each counts its columns once
-	j1, l1 := s1+s2-q2, s3+s4-q2
-	j2, l2 := s1+s3-q3, s2+s4-q3
-	return tetrad{j1, j2, j3, l1, l2, l3}
+	return tetrad{binsum.Quadruple{T: s4, S1: s3, S2: s2, S3: s1, N1: q1 - s3, N2: q2 - s2, N3: q3 - s1}}
 }
 
 // JMax returns the largest argument of the table.

@@ -6,14 +6,14 @@ import (
 	"example.org/couplet/wigner"
 )
 
-// mulTriangle multiplies f by Δ(abc)^(2 power), with a, b, c given as twice their values, where
+// mulTriangle multiplies f by Δ(abc)^(2 power), with x = a+b-c, y = a-b+c, z = -a+b+c in any order, where
 //
 //	Δ(abc)^2 = (a+b-c)! (a-b+c)! (-a+b+c)! / (a+b+c+1)!    DLMF (34.2.5)
-func mulTriangle(f *rational.Factored, a, b, c, power int) {
-	f.MulFactorial((a+b-c)/2, power)
-	f.MulFactorial((a-b+c)/2, power)
-	f.MulFactorial((b-a+c)/2, power)
-	f.MulFactorial((a+b+c)/2+1, -power)
+func mulTriangle(f *rational.Factored, x, y, z, power int) {
+	f.MulFactorial(x, power)
+	f.MulFactorial(y, power)
+	f.MulFactorial(z, power)
+	f.MulFactorial(x+y+z+1, -power)
 }
 
 // checkTriads returns the first triad, by places, that breaks a selection rule, or an error for a negative
