@@ -121,11 +121,12 @@ func laddersExact(ladders *[3]ladder, first, last int) (sum dd.Pair, ok bool) {
 	var high, low uint64
 	magnitude := 0.0
 	for x := first; x <= last; x += 2 {
-		p, q, r := sums[0][i]*float64(x+1), sums[1][j], sums[2][k]
-		h, l := binsum.MulInt64(int64(p), int64(q))
-		h, l = binsum.Mul128(h, l, uint64(int64(r)>>63), uint64(int64(r)))
+		// The first product is below 2^57, as x+1 is below 2^8.
+		p, q, r := int64(sums[0][i])*int64(x+1), int64(sums[1][j]), int64(sums[2][k])
+		h, l := binsum.MulInt64(p, q)
+		h, l = binsum.Mul128(h, l, uint64(r>>63), uint64(r))
 		high, low = binsum.Add128(high, low, h, l)
-		magnitude += math.Abs(float64(p * q * r))
+		magnitude += math.Abs(float64(float64(p) * float64(q) * float64(r)))
 		i, j, k = i+1, j+1, k+1
 	}
 	return dd.FromMod128(high, low), magnitude < 0x1p126

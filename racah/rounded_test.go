@@ -63,7 +63,7 @@ func TestRoundedRandom(t *testing.T) {
 		}
 		return max(a-b, b-a) + 2*between(0, n)
 	}
-	for _, c := range []struct{ size, draws int }{{4, 20000}, {8, 20000}, {14, 20000}, {20, 20000}, {32, 20000}, {44, 10000}, {65, 10000}, {100, 4000}, {200, 1000}, {1000, 40}} {
+	for _, c := range []struct{ size, draws int }{{4, 20000}, {8, 20000}, {14, 30000}, {20, 30000}, {32, 30000}, {44, 20000}, {65, 20000}, {100, 10000}, {130, 4000}, {200, 1000}, {1000, 40}, {10000, 8}} {
 		racah.Fallbacks()
 		values, nonzero, tiny := 0, 0, 0
 		for range published.Effort(t, c.draws) {

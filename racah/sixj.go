@@ -176,6 +176,13 @@ func (k *tetrad) triads() [4][4]int {
 	}
 }
 
+// momenta returns twice the arguments, {a b c; d e f} with abc in front: two triads have one momentum in common, and
+// the two columns that are opposite to it have the others.
+func (k *tetrad) momenta() (a, b, c, d, e, f int) {
+	q1, q2, q3 := k.N1+k.S1, k.N2+k.S2, k.N3+k.S3
+	return k.T + k.S2 - q2, k.T + k.S3 - q3, k.T + k.S1 - q1, k.S3 + k.S1 - q2, k.S2 + k.S1 - q3, k.S2 + k.S3 - q1
+}
+
 // exact returns the value.
 func (k *tetrad) exact() rational.Surd {
 	var front rational.Factored // squared

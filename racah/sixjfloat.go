@@ -3,6 +3,7 @@ package racah
 import (
 	"sync/atomic"
 
+	"example.org/couplet/internal/argument"
 	"example.org/couplet/internal/dd"
 	"example.org/couplet/internal/mantissa"
 	"example.org/couplet/rational"
@@ -42,6 +43,9 @@ func WFloat(a, b, c, d, e, f rational.Half) float64 {
 // largeError bounds the relative error before rounding, derived at largeFront.
 const largeError = 0x1p-98
 
+// rowTotal is the T beyond which the row, in time proportional to it, is faster than the sum; a calibration.
+const rowTotal = 4000
+
 // fallbacks counts the values that only the exact route could round.
 var fallbacks atomic.Int64
 
@@ -51,6 +55,8 @@ func (k *tetrad) float(negative bool) float64 {
 	f, ok := 0.0, false
 	if k.Fits() && k.T < dd.BinomialTops { // no triad is larger
 		f, ok = k.fewWords(negative)
+	} else if k.T > rowTotal && k.T <= argument.MostInRow { // no 2j exceeds T
+		f, ok = k.byRow(negative)
 	}
 	if !ok {
 		f, ok = k.manyWords(negative)

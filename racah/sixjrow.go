@@ -1,6 +1,8 @@
 package racah
 
 import (
+	"math"
+
 	"example.org/couplet/internal/argument"
 	"example.org/couplet/internal/dd"
 	"example.org/couplet/internal/row"
@@ -79,4 +81,29 @@ func sixJGap(f int) float64 {
 		return float64(8 * (f + 2))
 	}
 	return float64(8 * f)
+}
+
+// byRow is the route for large symbols: it computes the shortest row that the symbol is in, with a bound that is
+// proved after the fact, and takes the member from it. ok is false where that leaves the rounding open: close to
+// zeros, and for values far below the largest of the row.
+func (k *tetrad) byRow(negative bool) (f float64, ok bool) {
+	a, b, c, d, e, g := k.momenta()
+	rec, n, minus := newSixJRow(a, b, d, e, g)
+	member, opposite := c, g
+	for _, q := range [...][6]int{{b, c, a, e, g, d}, {c, a, b, g, d, e}, {e, c, d, b, g, a}, {g, a, e, c, d, b}, {d, b, g, a, e, c}} {
+		if r, length, last := newSixJRow(q[0], q[1], q[3], q[4], q[5]); length < n {
+			rec, n, minus, member, opposite = r, length, last, q[2], q[5]
+		}
+	}
+	buffer := make([]float64, 2*n)
+	x, low := buffer[:n], buffer[n:]
+	weight := float64(opposite + 1)
+	rec.Solve(x, low, weight, minus)
+	i := (member - rec.First) / 2
+	v := dd.Pair{Hi: x[i], Lo: low[i]}
+	bound := rec.Error(x, low, weight, sixJGap(opposite)) / math.Sqrt(weight*float64(member+1)) / math.Abs(v.Hi)
+	if !(bound < 0x1p-60) {
+		return 0, false
+	}
+	return v.Scale(0, negative).Round(float64(bound*(1+0x1p-20)) + 0x1p-100)
 }

@@ -96,6 +96,55 @@ func TestEveryTriadInFront(t *testing.T) {
 	}
 }
 
+// momenta gives the arguments back, whatever triad is in front.
+func TestMomenta(t *testing.T) {
+	r := rand.New(rand.NewPCG(37, 37))
+	for range 10000 {
+		chosen := drawTetrad(r, 20)
+		a, b, c, d, e, f := chosen.momenta()
+		if k := newTetrad(a, b, c, d, e, f); k != chosen {
+			t.Fatalf("%+v has momenta %d %d %d, %d %d %d: %+v", chosen, a, b, c, d, e, f, k)
+		}
+	}
+	k := newTetrad(6, 5, 3, 4, 5, 7)
+	if a, b, c, d, e, f := k.momenta(); [6]int{a, b, c, d, e, f} != [6]int{6, 5, 3, 4, 5, 7} {
+		t.Errorf("momenta are %d %d %d, %d %d %d", a, b, c, d, e, f)
+	}
+}
+
+// The route by rows, forced on small symbols and large ones, gives the bits of the routes by sums where it
+// does not refuse, and refuses little but zeros and what is far below the largest of its row.
+func TestByRow(t *testing.T) {
+	r := rand.New(rand.NewPCG(38, 38))
+	taken, refused, zeros := 0, 0, 0
+	for _, c := range []struct{ size, draws int }{{8, 4000}, {40, 2000}, {400, 300}, {4000, 20}, {20000, 3}} {
+		for range c.draws {
+			k := drawTetrad(r, c.size)
+			want, ok := k.manyWords(false)
+			if !ok {
+				want = k.exact().Float64()
+			}
+			f, ok := k.byRow(false)
+			minus, okMinus := k.byRow(true)
+			if !ok {
+				refused++
+				if want == 0 {
+					zeros++
+				}
+				continue
+			}
+			taken++
+			if math.Float64bits(f) != math.Float64bits(want) || !okMinus || minus != -f {
+				t.Fatalf("%+v: %g by its row, %g for the negative, want %g", k, f, minus, want)
+			}
+		}
+	}
+	t.Logf("%d values by their rows, %d refused, %d of them zeros", taken, refused, zeros)
+	if refused-zeros > taken/20 || zeros == 0 {
+		t.Error("too many refused, or no zero")
+	}
+}
+
 // The fronts are as accurate as they claim before they are rounded, and not much more: a smaller bound
 // makes this test fail.
 func TestFrontErrors(t *testing.T) {

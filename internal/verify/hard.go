@@ -3,6 +3,7 @@ package verify
 import (
 	"math"
 	"math/big"
+	"slices"
 	"sort"
 
 	"example.org/couplet/internal/dd"
@@ -62,3 +63,64 @@ func (h *Hardest) Add(hardness float64, text string) {
 
 // Texts returns the cases, the hardest first.
 func (h *Hardest) Texts() []string { return h.texts }
+
+// NearOdd calls do for numbers q between low and high for which q*kappa is within 2^-bits of an odd integer: for
+// the denominators in the continued fraction of kappa, and their multiples.
+func NearOdd(kappa *big.Float, low, high int64, bits uint, do func(q int64)) {
+	const fraction = 100 // bits of kappa after the point that are used
+	scaled, _ := new(big.Float).SetMantExp(kappa, fraction).Int(nil)
+	one := new(big.Int).Lsh(big.NewInt(1), fraction)
+	most := new(big.Int).Rsh(one, bits)
+	// Euclid's algorithm: q kappa is r/one away from an integer, on alternating sides.
+	r0, r1 := new(big.Int).Set(one), new(big.Int).Mod(scaled, one)
+	q0, q1 := int64(0), int64(1)
+	quotient, product := new(big.Int), new(big.Int)
+	for q1 <= high && r1.Sign() > 0 {
+		if r1.Cmp(most) < 0 {
+			multiples := high / q1
+			if n := quotient.Quo(most, r1); n.IsInt64() {
+				multiples = min(multiples, n.Int64())
+			}
+			for t := max(1, (low+q1-1)/q1); t <= multiples; t++ {
+				product.Mul(scaled, big.NewInt(t*q1))
+				product.Add(product, quotient.Rsh(one, 1)) // to round
+				if product.Rsh(product, fraction).Bit(0) == 1 {
+					do(t * q1)
+				}
+			}
+		}
+		quotient.QuoRem(r0, r1, product)
+		r0, r1, product = r1, product, r0
+		if !quotient.IsInt64() || quotient.Int64() > (high-q0)/q1 {
+			return
+		}
+		q0, q1 = q1, q0+quotient.Int64()*q1
+	}
+}
+
+// Closest keeps the 40 cases with the most bits alike.
+type Closest struct{ cases []closeCase }
+
+type closeCase struct {
+	bits int
+	line string
+}
+
+// Add adds a case, unless it is there already or 40 are closer.
+func (c *Closest) Add(bits int, line string) {
+	added := closeCase{bits, line}
+	if slices.Contains(c.cases, added) {
+		return
+	}
+	c.cases = append(c.cases, added)
+	slices.SortStableFunc(c.cases, func(a, b closeCase) int { return b.bits - a.bits })
+	c.cases = c.cases[:min(len(c.cases), kept)]
+}
+
+// Lines returns the cases, the closest first.
+func (c *Closest) Lines() (lines []string) {
+	for _, q := range c.cases {
+		lines = append(lines, q.line)
+	}
+	return lines
+}
