@@ -30,8 +30,19 @@ func SixJFloat(j1, j2, j3, l1, l2, l3 rational.Half) float64 {
 }
 
 // WFloat returns the float64 nearest to the Racah coefficient of [W], to even on a tie, whatever its
-// size. Zeros and panics are those of W. It allocates nothing while every triad adds up to 300 at most.
+// size. Zeros and panics are those of W. It allocates nothing while every triad adds up to 300 at most, but for
+// tables that are built by the first calls.
 func WFloat(a, b, c, d, e, f rational.Half) float64 {
+	if max(a.Twice(), b.Twice(), c.Twice(), d.Twice(), e.Twice(), f.Twice()) <= smallTop {
+		v, ok := small().at(a.Twice(), b.Twice(), e.Twice(), d.Twice(), c.Twice(), f.Twice())
+		if !ok {
+			forbidden("racah.WFloat", &wNames, a, b, e, d, c, f)
+		}
+		if wPhase(a, b, c, d) {
+			return 0 - v // not -v: zeros have no sign
+		}
+		return v
+	}
 	var k tetrad
 	if !k.set(a, b, e, d, c, f) {
 		forbidden("racah.WFloat", &wNames, a, b, e, d, c, f)
