@@ -141,3 +141,24 @@ func TestNineJFloatZeros(t *testing.T) {
 		t.Errorf("%d zeros, %d by the exact route", len(sets), n)
 	}
 }
+
+// Float against exact. The arguments are coupled to each other by the selectors, so that most are allowed.
+func FuzzNineJ(f *testing.F) {
+	f.Add(uint8(2), uint8(2), uint8(2), uint8(2), uint8(0), uint8(1), uint8(1), uint8(1), uint8(2))
+	f.Add(uint8(6), uint8(25), uint8(21), uint8(2), uint8(4), uint8(0), uint8(4), uint8(0), uint8(9)) // 27, 19, 23, 23, 26
+	f.Add(uint8(40), uint8(42), uint8(44), uint8(46), uint8(20), uint8(21), uint8(22), uint8(23), uint8(24))
+	f.Add(uint8(99), uint8(0), uint8(100), uint8(1), uint8(0), uint8(1), uint8(50), uint8(0), uint8(50))
+	f.Fuzz(func(t *testing.T, a, b, d, e, toC, toF, toG, toH, toI uint8) {
+		couple := func(a, b int, selector uint8) int {
+			return max(a-b, b-a) + 2*(int(selector)%(min(a, b)+1))
+		}
+		q := [9]int{int(a) % 120, int(b) % 120, 0, int(d) % 120, int(e) % 120}
+		q[2], q[5] = couple(q[0], q[1], toC), couple(q[3], q[4], toF)
+		q[6], q[7] = couple(q[0], q[3], toG), couple(q[1], q[4], toH)
+		q[8] = couple(q[2], q[5], toI)
+		if max(q[2], q[5], q[6], q[7], q[8]) > 160 || !triad(q[6], q[7], q[8]) {
+			t.Skip()
+		}
+		compareNineJ(t, q)
+	})
+}
