@@ -162,14 +162,12 @@ func nineJRange(t *square.Array) (first, last int) {
 	return max(distance(t[0], t[8]), distance(t[1], t[5]), distance(t[3], t[7])), min(t[0]+t[8], t[1]+t[5], t[3]+t[7])
 }
 
-// nineJFactors returns the three 6j symbols of the sum, x given as twice its value.
-func nineJFactors(t *square.Array, x int) [3]tetrad {
+// nineJFactors sets k to the three 6j symbols of the sum, x given as twice its value.
+func nineJFactors(k *[3]tetrad, t *square.Array, x int) {
 	a, b, c, d, e, f, g, h, i := t[0], t[1], t[2], t[3], t[4], t[5], t[6], t[7], t[8]
-	return [3]tetrad{
-		newTetrad(a, i, x, f, b, c), // { a b c; f i x } with its triad (a i x) in front
-		newTetrad(b, x, f, d, e, h), // { d e f; b x h } with (b x f)
-		newTetrad(x, h, d, g, a, i), // { g h i; x a d } with (x h d)
-	}
+	k[0].setMomenta(a, i, x, f, b, c) // { a b c; f i x } with its triad (a i x) in front
+	k[1].setMomenta(b, x, f, d, e, h) // { d e f; b x h } with (b x f)
+	k[2].setMomenta(x, h, d, g, a, i) // { g h i; x a d } with (x h d)
 }
 
 // nineJSum returns |Σ_x (2x+1) S1 S2 S3|, S1 to S3 being the sums in the three 6j symbols, and whether
@@ -177,11 +175,10 @@ func nineJFactors(t *square.Array, x int) [3]tetrad {
 func nineJSum(t *square.Array, room *binsum.ProductRoom) (sum []big.Word, negative bool) {
 	first, last := nineJRange(t)
 	sum, negative = binsum.SumOfProducts((last-first)/2+1, func(i int) (w uint, s [3]binsum.Quadruple) {
+		var k [3]tetrad
 		x := first + 2*i
-		for i, k := range nineJFactors(t, x) {
-			s[i] = k.Quadruple
-		}
-		return uint(x + 1), s
+		nineJFactors(&k, t, x)
+		return uint(x + 1), [3]binsum.Quadruple{k[0].Quadruple, k[1].Quadruple, k[2].Quadruple}
 	}, room)
 	return sum, len(sum) > 0 && negative != (first&1 != 0)
 }
@@ -190,10 +187,12 @@ func nineJSum(t *square.Array, room *binsum.ProductRoom) (sum []big.Word, negati
 func nineJWord(t *square.Array) (z int64, ok bool) {
 	first, last := nineJRange(t)
 	room := 63 - bits.Len(uint((last+1)*((last-first)/2+1))) // for the product of three sums
+	var k [3]tetrad
 	for x := first; x <= last; x += 2 {
 		term, left := int64(x+1), room
-		for _, k := range nineJFactors(t, x) {
-			v, ok := k.Word()
+		nineJFactors(&k, t, x)
+		for i := range k {
+			v, ok := k[i].Word()
 			if left -= bits.Len64(uint64(max(v, -v))); !ok || left < 0 {
 				return 0, false
 			}

@@ -202,16 +202,18 @@ func nineJSmallFront(t *square.Array) mantissa.Number {
 // nineJMod128 returns the sum of nineJSum modulo 2^128, where the tables of binomials reach far enough.
 func nineJMod128(t *square.Array) (high, low uint64, ok bool) {
 	first, last := nineJRange(t)
+	var k [3]tetrad
 	for x := first; x <= last; x += 2 {
 		h, l := uint64(0), uint64(x+1)
-		for _, k := range nineJFactors(t, x) {
-			if !k.Fits() {
+		nineJFactors(&k, t, x)
+		for i := range k {
+			if !k[i].Fits() {
 				return 0, 0, false
 			}
-			if v, ok := k.Word(); ok {
+			if v, ok := k[i].Word(); ok {
 				h, l = binsum.Mul128(h, l, uint64(v>>63), uint64(v))
 			} else {
-				sh, sl := k.Mod128()
+				sh, sl := k[i].Mod128()
 				h, l = binsum.Mul128(h, l, sh, sl)
 			}
 		}

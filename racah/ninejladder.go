@@ -52,7 +52,7 @@ func (l *ladder) factors(J float64) (above, here, below float64) {
 func (l *ladder) reaches() bool { return (l.p+l.q+l.r+l.s)/2+1 < dd.BinomialTops }
 
 // end returns the places of the four binomials in the sum at one of the ends, where it has one term, and its
-// sign: those of newTetrad, with twice x for c.
+// sign: those of setMomenta, with twice x for c.
 func (l *ladder) end(x int) (h, i, j, k int, sign float64) {
 	total, s1, s2, s3 := (l.p+l.q+x)>>1, (l.r+l.s+x)>>1, (l.p+l.s+l.t)>>1, (l.r+l.q+l.t)>>1
 	t := max(total, s1, s2, s3)

@@ -156,11 +156,10 @@ func (k *tetrad) place(s *[4]int, front, q1, q2, q3 int) {
 	k.N1, k.N2, k.N3 = q1-k.S1, q2-k.S2, q3-k.S3
 }
 
-// newTetrad returns the allowed symbol {a b c; d e f}, from twice its arguments, with abc in front.
-func newTetrad(a, b, c, d, e, f int) (k tetrad) {
-	k.place(&[4]int{(a + b + c) >> 1, (a + e + f) >> 1, (d + b + f) >> 1, (d + e + c) >> 1}, 0,
-		(a+b+d+e)>>1, (b+c+e+f)>>1, (a+c+d+f)>>1)
-	return k
+// setMomenta takes the allowed symbol {a b c; d e f}, from twice its arguments, with abc in front.
+func (k *tetrad) setMomenta(a, b, c, d, e, f int) {
+	s := [4]int{(a + b + c) >> 1, (a + e + f) >> 1, (d + b + f) >> 1, (d + e + c) >> 1}
+	k.place(&s, 0, (a+b+d+e)>>1, (b+c+e+f)>>1, (a+c+d+f)>>1)
 }
 
 // triads returns the numbers that the four triangle coefficients depend on: the sum of a triad and the three by

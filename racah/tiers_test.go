@@ -28,6 +28,11 @@ func drawTetrad(r *rand.Rand, size int) (k tetrad) {
 	}
 }
 
+func newTetrad(a, b, c, d, e, f int) (k tetrad) {
+	k.setMomenta(a, b, c, d, e, f)
+	return k
+}
+
 // Every tier, on the same small symbols, gives the bits of the exact route.
 func TestForcedTiers(t *testing.T) {
 	r := rand.New(rand.NewPCG(14, 14))

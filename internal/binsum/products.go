@@ -15,7 +15,7 @@ func SumOfProducts(n int, term func(i int) (w uint, s [3]Quadruple), room *Produ
 	most := 0
 	for i := range n {
 		w, s := term(i)
-		most = max(most, bits.Len(w)+s[0].bits()+s[1].bits()+s[2].bits())
+		most = max(most, bits.Len(w)+s[0].plainBits()+s[1].plainBits()+s[2].plainBits())
 	}
 	width := (most+bits.Len(uint(n)))/bits.UintSize + 2 // room for the sign
 	total = room[:]

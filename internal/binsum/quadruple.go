@@ -156,5 +156,11 @@ func (s *Quadruple) inWord() bool {
 	if last+1 >= tableTops {
 		return false
 	}
-	return BinomialBits(last+1, s.T+1)+BinomialBits(s.T, s.T/2) <= 63 || s.bits() <= 63
+	return s.plainBits() <= 63 || s.bits() <= 63
+}
+
+// plainBits is the first of the bounds of bits, which is quick.
+func (s *Quadruple) plainBits() int {
+	_, last := s.limits()
+	return BinomialBits(last+1, s.T+1) + BinomialBits(s.T, s.T/2)
 }
