@@ -1,6 +1,7 @@
 package racah_test
 
 import (
+	"context"
 	"errors"
 	"fmt"
 	"math"
@@ -188,4 +189,22 @@ func FuzzSixJ(f *testing.F) {
 			}
 		}
 	})
+}
+
+// Negative arguments so large that sums of them leave 32 bits are refused on every platform.
+func TestHugeNegative(t *testing.T) {
+	huge := -(1<<31 - 1)
+	table, err := racah.NewSixJTable(context.Background(), h(4), nil)
+	if err != nil {
+		t.Fatal(err)
+	}
+	for _, q := range [][6]int{{0, huge, huge, 0, huge, huge}, {-1 << 30, 16, -1 << 30, -1 << 30, 2, -1 << 30}, {huge, huge, huge, huge, huge, huge}} {
+		for name, f := range map[string]func(a, b, c, d, e, f rational.Half) float64{
+			"SixJFloat": racah.SixJFloat, "WFloat": racah.WFloat, "SixJTable.At": table.At,
+		} {
+			if e := verify.Recovered(func() { f(h(q[0]), h(q[1]), h(q[2]), h(q[3]), h(q[4]), h(q[5])) }); e == nil {
+				t.Errorf("%s %v does not panic", name, q)
+			}
+		}
+	}
 }

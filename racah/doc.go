@@ -16,5 +16,6 @@
 // # Accuracy
 //
 // The functions whose names end in Float return the nearest float64, to even on a tie, rows are within the
-// bound that they state, and all others are exact. Symbols may have arguments of any size that memory allows.
+// bound that they state, and all others are exact. Symbols may have arguments up to
+// 2^26, where time and memory allow; beyond, the exact route may panic.
 package racah

@@ -14,10 +14,11 @@ import (
 )
 
 // NineJFloat returns the float64 nearest to the 9j symbol of [NineJ], to even on a tie, whatever its size.
-// Zeros and panics are those of NineJ. Time grows like the size where no argument is above 2^23 and the symbol is
-// neither an accidental zero nor too close to a rounding boundary, and like that of NineJ elsewhere. It allocates
-// nothing while every argument is at most 100, zeros included, but for tables that are built by the first
-// calls, and for what only the exact route can round, of which no case is known.
+// Zeros and panics are those of NineJ; a value below the subnormal numbers becomes a zero with its sign. Time
+// grows like the size where no argument is above 2^23 and the symbol is neither an accidental zero, nor too
+// close to a rounding boundary, nor far below the terms of its sum, and like that of NineJ elsewhere. It
+// allocates nothing while every argument is at most 100, zeros included, but for tables that are built by the
+// first calls, and for what only the exact route can round, of which no case is known.
 func NineJFloat(a, b, c, d, e, f, g, h, i rational.Half) float64 {
 	var t square.Array
 	if !nineJArray(&t, a, b, c, d, e, f, g, h, i) {
@@ -158,8 +159,8 @@ func laddersPair(ladders *[3]ladder, first, last int) (sum dd.Pair, bound float6
 	return total.Value, float64(1.01*uu*bound) / math.Abs(total.Value.Hi) // 1.01 for the roundings here
 }
 
-// nineJFewWords is the route for symbols whose sum fits into two words and the ladders leave open, zeros
-// mainly; ok is false for others too. The front, at least 2^Exp, tells that |S| <= 1/front is below 2^126.
+// nineJFewWords is the route for symbols that the ladders leave open, zeros mainly, and whose sum fits into two
+// words; ok is false where it need not. The front, at least 2^Exp, tells that |S| <= 1/front is below 2^126.
 func nineJFewWords(t *square.Array) (f float64, ok bool) {
 	if nineJTop(t) > dd.BinomialTops {
 		return 0, false
@@ -234,7 +235,7 @@ const rowMembers = 201
 //
 // With p, q, r the symbols, and e the bound of [row.Recurrence.Error] for p, whose weight is w,
 // Schwarz's inequality bounds what the error of p adds by e/sqrt(w) sqrt(Σ (2x+1) q^2 r^2), and for q and r
-// alike. The roundings of a term and of the sums add 40 u^2 + 2n u^2 of Σ (2x+1) |pqr| at the most.
+// alike. The roundings of a term and of the sums add 40 u^2 + 6n u^2 of Σ (2x+1) |pqr| at the most.
 func nineJByRows(t *square.Array) (f float64, ok bool) {
 	if slices.Max(t[:]) > argument.MostInRow {
 		return 0, false
@@ -272,7 +273,7 @@ func nineJByRows(t *square.Array) (f float64, ok bool) {
 		others[1] += float64(w * rp * rp)
 		others[2] += float64(w * pq * pq)
 	}
-	bound := float64(40+2*n) * 0x1p-106 * sum.Magnitude
+	bound := float64(40+6*n) * uu * sum.Magnitude
 	for k := range bounds {
 		bound += float64(bounds[k] / math.Sqrt(weights[k]) * math.Sqrt(others[k]))
 	}

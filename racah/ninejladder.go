@@ -49,7 +49,9 @@ func (l *ladder) factors(J float64) (above, here, below float64) {
 
 // reaches reports whether the table of binomials reaches the ends: where there is one term, t is not above
 // the sum of p, q, r, s.
-func (l *ladder) reaches() bool { return (l.p+l.q+l.r+l.s)/2+1 < dd.BinomialTops }
+func (l *ladder) reaches() bool {
+	return (int64(l.p)+int64(l.q)+int64(l.r)+int64(l.s))/2+1 < dd.BinomialTops
+}
 
 // end returns the places of the four binomials in the sum at one of the ends, where it has one term, and its
 // sign: those of setMomenta, with twice x for c.

@@ -7,6 +7,7 @@ import (
 	"testing"
 
 	"example.org/couplet/internal/binsum"
+	"example.org/couplet/internal/dd"
 	"example.org/couplet/internal/square"
 	"example.org/couplet/rational"
 	"example.org/couplet/wigner"
@@ -182,5 +183,41 @@ func TestLaddersPair(t *testing.T) {
 	t.Logf("%d sums, %d of them exact; errors up to %.3f of the bound", cases, exacts, worst)
 	if worst < 1.0/128 || exacts < cases/4 {
 		t.Error("the bound is far too wide, or the draw misses")
+	}
+}
+
+// A product with a factor that is zero but for its error.
+func TestBoundedMul(t *testing.T) {
+	p, s := bounded{dd.Pair{}, 0x1p60}, bounded{dd.Pair{}, 0x1p70}
+	if p.mul(&s); p.err < 0x1p130*uu || p.err > 0x1p131*uu {
+		t.Errorf("error %g, want %g", p.err, 0x1p130*uu)
+	}
+}
+
+// Two words hold the sum where nineJFewWords takes them to: with fronts on both sides of its limit.
+func TestNineJFewWords(t *testing.T) {
+	r := rand.New(rand.NewPCG(39, 39))
+	taken, left := 0, 0
+	try := func(q square.Array) {
+		exp := nineJLargeFront(&q).Exp
+		f, ok := nineJFewWords(&q)
+		switch {
+		case !ok && exp < -125 && exp > -146:
+			left++
+		case ok && exp < -105:
+			taken++
+			fallthrough
+		case ok:
+			if want := nineJExact(&q).Float64(); f != want {
+				t.Fatalf("%v: %g, exact %g", q, f, want)
+			}
+		}
+	}
+	try(square.Array{62, 62, 0, 62, 0, 62, 124, 62, 62})
+	for range 4000 {
+		try(drawArray(r, 30))
+	}
+	if taken < 50 || left < 50 {
+		t.Errorf("%d close below the limit, %d close above it", taken, left)
 	}
 }

@@ -21,7 +21,7 @@ import (
 // selection rule; [CheckSixJ] says which. It panics with *rational.ArgumentError for a negative
 // argument.
 //
-// Any size is allowed. Time grows like the number of terms times the length of the sum, at most some four
+// Arguments may be up to 2^26. Time grows like the number of terms times the length of the sum, at most some four
 // times as many bits as the largest argument has units; tables of primes reach to the largest triad.
 func SixJ(j1, j2, j3, l1, l2, l3 rational.Half) rational.Surd {
 	var k tetrad
@@ -59,7 +59,8 @@ func wPhase(a, b, c, d rational.Half) bool {
 
 // CheckSixJ tells why the 6j symbol of [SixJ] vanishes, or that it does not: the first triad that
 // breaks a selection rule, or that the zero is accidental, for which it computes the symbol, at the cost
-// of SixJ: whoever takes arguments from strangers limits their size. The error, a *rational.ArgumentError, names a malformed argument; CheckSixJ does not panic.
+// of SixJ: whoever takes arguments from strangers limits their size. The error, a *rational.ArgumentError,
+// names a malformed argument; CheckSixJ does not panic.
 func CheckSixJ(j1, j2, j3, l1, l2, l3 rational.Half) (wigner.Verdict, error) {
 	q := sixJ{fn: "racah.CheckSixJ", names: &sixJNames, j: [6]rational.Half{j1, j2, j3, l1, l2, l3}}
 	return q.verdict()

@@ -10,8 +10,8 @@ import (
 )
 
 // SixJFloat returns the float64 nearest to the 6j symbol of [SixJ], to even on a tie, whatever its size.
-// Zeros and panics are those of SixJ. It allocates nothing while every triad adds up to 300 at most, but for
-// tables that are built by the first calls.
+// Zeros and panics are those of SixJ; a value below the subnormal numbers becomes a zero with its sign. It
+// allocates nothing while every triad adds up to 300 at most, but for tables that are built by the first calls.
 func SixJFloat(j1, j2, j3, l1, l2, l3 rational.Half) float64 {
 	a, b, c, d, e, f := j1.Twice(), j2.Twice(), j3.Twice(), l1.Twice(), l2.Twice(), l3.Twice()
 	if max(a, b, c, d, e, f) <= smallTop {
@@ -33,8 +33,8 @@ func SixJFloat(j1, j2, j3, l1, l2, l3 rational.Half) float64 {
 }
 
 // WFloat returns the float64 nearest to the Racah coefficient of [W], to even on a tie, whatever its
-// size. Zeros and panics are those of W. It allocates nothing while every triad adds up to 300 at most, but for
-// tables that are built by the first calls.
+// size. Zeros and panics are those of W; a value below the subnormal numbers becomes a zero with its sign. It
+// allocates nothing while every triad adds up to 300 at most, but for tables that are built by the first calls.
 func WFloat(a, b, c, d, e, f rational.Half) float64 {
 	if max(a.Twice(), b.Twice(), c.Twice(), d.Twice(), e.Twice(), f.Twice()) <= smallTop {
 		v, ok := small().at(a.Twice(), b.Twice(), e.Twice(), d.Twice(), c.Twice(), f.Twice())

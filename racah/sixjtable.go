@@ -99,7 +99,7 @@ func (t *SixJTable) At(j1, j2, j3, l1, l2, l3 rational.Half) float64 {
 // symbol and for a negative argument.
 func (t *SixJTable) at(a, b, c, d, e, f int) (v float64, ok bool) {
 	s1, s2, s3, s4 := a+b+c, a+e+f, d+b+f, d+e+c // twice the sums
-	if (s1-2*a)|(s1-2*b)|(s1-2*c)|(s2-2*a)|(s2-2*e)|(s2-2*f)|
+	if a|b|c|d|e|f|(s1-2*a)|(s1-2*b)|(s1-2*c)|(s2-2*a)|(s2-2*e)|(s2-2*f)|
 		(s3-2*d)|(s3-2*b)|(s3-2*f)|(s4-2*d)|(s4-2*e)|(s4-2*c) < 0 || (s1|s2|s3|s4)&1 != 0 {
 		return 0, false
 	}

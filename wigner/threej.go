@@ -21,7 +21,7 @@ import (
 // It is zero where a triad or a projection breaks a selection rule; [CheckThreeJ] says which. It
 // panics with *rational.ArgumentError for a negative j and for a j-m that is not an integer.
 //
-// Any j is allowed. Time grows like the number of terms, one more than the smallest of ji±mi and n1 to n3,
+// Every j may be up to 2^26. Time grows like the number of terms, one more than the smallest of ji±mi and n1 to n3,
 // times the length of the sum, at most J bits; tables of primes and of their exponents reach to J.
 func ThreeJ(j1, j2, j3, m1, m2, m3 rational.Half) rational.Surd {
 	var r regge
@@ -165,8 +165,8 @@ func (r *regge) set(j1, j2, j3, m1, m2, m3 rational.Half) bool {
 // total returns J.
 func (r *regge) total() int { return r[0] + r[1] + r[2] }
 
-// sum sets s to the sum of DLMF (34.2.4), in place: a copy of what was just written has to wait. It has as many terms as the smallest entry of the square has
-// units, and one.
+// sum sets s to the sum of DLMF (34.2.4), in place: a copy of what was just written has to wait. It has as many
+// terms as the smallest entry of the square has units, and one.
 func (r *regge) sum(s *binsum.Triple) {
 	s.N1, s.N2, s.N3, s.A, s.B = r[2], r[1], r[0], r[3], r[7]
 }

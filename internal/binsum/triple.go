@@ -17,7 +17,7 @@ func (s *Triple) limits() (first, last int) {
 	return max(0, s.A-s.N2, s.B-s.N3), min(s.N1, s.A, s.B)
 }
 
-// Mod64 returns S modulo 2^64. The N must be below 192.
+// Mod64 returns S modulo 2^64. The N must be below 189.
 func (s *Triple) Mod64() uint64 {
 	first, last := s.limits()
 	t := &binomials().low
@@ -35,7 +35,7 @@ func (s *Triple) Mod64() uint64 {
 	return total
 }
 
-// Mod128 returns S modulo 2^128, in two words. The N must be below 192.
+// Mod128 returns S modulo 2^128, in two words. The N must be below 189.
 func (s *Triple) Mod128() (high, low uint64) {
 	first, last := s.limits()
 	t := binomials()

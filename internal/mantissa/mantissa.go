@@ -31,7 +31,7 @@ func (a Number) Mul(b Number) Number {
 func (a Number) Words() int { return (65 - a.Exp) >> 6 }
 
 // FromMod64 returns the absolute value of the number between -2^63 and 2^63 that n is congruent to modulo 2^64,
-// exactly, and 1 for a negative one.
+// exactly, and its sign, 1 where it is negative.
 func FromMod64(n uint64) (a Number, sign uint64) {
 	sign = n >> 63
 	n = n ^ -sign + sign

@@ -25,7 +25,7 @@ type Recurrence struct {
 	C1         float64
 }
 
-// link returns l(J), normal or nearly so, with an error below 6 u^2.
+// link returns l(J), normal or nearly so, with an error below 15 u^2.
 func (r *Recurrence) link(J float64) dd.Pair {
 	jj := float64(J * J)
 	a, b, c, d := jj-r.A, r.B-jj, jj-r.C, r.D-float64(r.E*jj)
@@ -36,7 +36,7 @@ func (r *Recurrence) link(J float64) dd.Pair {
 	return dd.Pair{Hi: root, Lo: float64((math.FMA(-root, root, s) + rest) * (0.5 / root))}
 }
 
-// diagonal returns d(J), for J = 0 without its factor J, with an error below 2 u^2. The bracket is an
+// diagonal returns d(J), for J = 0 without its factor J, with an error below 3 u^2. The bracket is an
 // integer that Normal leaves exact, whatever cancels in it.
 func (r *Recurrence) diagonal(J float64) dd.Pair {
 	jj := float64(J * (J + 2))
@@ -189,9 +189,9 @@ func (e *end) shrink(x, low []float64) {
 // of C1. The other eigenvalues are at the distance gap or more. Then what is orthogonal to the eigenvector in
 // a vector of length 1 is at most the length of its residual, divided by gap.
 //
-// The residual is computed here, in double-double. With an error of 40 u^2 in each of its three terms, which
-// leaves room for that of l(J) with its root and up to four factors, below 15 u^2, of d(J), below 15 u^2, and
-// of products and sums, and with 4 u^2 for each term in the sum that normalizes the vector, the bound is safe.
+// The residual is computed here, in double-double. Each of its three terms has an error of 48 u^2 at the
+// most: 15 of l(J), 6 and 15 of its two products, 12 of two sums. The sum that normalizes the vector has 4 u^2
+// for each term, and 160 for the ends and for its root.
 // Members that have been lost by underflow are below 2^-500 of the largest.
 func (r *Recurrence) Error(x, low []float64, w, gap float64) float64 {
 	const uu = 0x1p-106
@@ -224,8 +224,8 @@ func (r *Recurrence) Error(x, low []float64, w, gap float64) float64 {
 		residual += float64(weight * sum.Hi * sum.Hi)
 		size += float64(weight * magnitude * magnitude)
 	}
-	length := math.Sqrt(residual) + float64(40*uu*math.Sqrt(size))
-	return float64(1.01*length/gap) + float64(float64(n+20)*4*uu) // 1.01 for the roundings here and the second order
+	length := math.Sqrt(residual) + float64(48*uu*math.Sqrt(size))
+	return float64(1.01*length/gap) + float64(float64(n+40)*4*uu) // 1.01 for the roundings here and the second order
 }
 
 // These two have relative errors of some u^2 and return numbers in normal form.
