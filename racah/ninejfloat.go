@@ -91,7 +91,13 @@ func nineJByLadders(t *square.Array) (f float64, ok bool) {
 	if !(bound < 0x1p-58) {
 		return 0, false
 	}
-	sum = sum.Normal().Scale(0, first&1 != 0)
+	return nineJRound(t, sum.Scale(0, first&1 != 0), bound)
+}
+
+// nineJRound rounds the product of the triangle coefficients and a sum that is off by bound, relative to it, at
+// the most.
+func nineJRound(t *square.Array, sum dd.Pair, bound float64) (f float64, ok bool) {
+	sum = sum.Normal()
 	if bound < 0x1p-66 { // 1/4 in M
 		n := mantissa.FromPair(sum.Scale(0, sum.Hi < 0))
 		f, ok = nineJSmallFront(t).Mul(n).Round(nineJSmallBelow, nineJSmallAbove, math.Float64bits(sum.Hi)>>63)

@@ -221,3 +221,33 @@ func TestNineJFewWords(t *testing.T) {
 		t.Errorf("%d close below the limit, %d close above it", taken, left)
 	}
 }
+
+// A sum that is off by nearly its bound is rounded right or refused.
+func TestNineJRound(t *testing.T) {
+	r := rand.New(rand.NewPCG(44, 44))
+	taken, refused := [2]int{}, [2]int{}
+	for range 20000 {
+		q := drawArray(r, 12)
+		words, negative := nineJSum(&q, new(binsum.ProductRoom))
+		if len(words) == 0 {
+			continue
+		}
+		high, low, exp := binsum.Leading(words)
+		sum := dd.FromWords(high, low).Normal().Scale(exp, negative)
+		kind := r.IntN(2)
+		bound := []float64{0x1p-58, 0x1p-67}[kind]
+		sum.Lo += float64(sum.Hi * bound * []float64{-0.99, 0.99}[r.IntN(2)])
+		f, ok := nineJRound(&q, sum, bound)
+		if !ok {
+			refused[kind]++
+			continue
+		}
+		taken[kind]++
+		if want := nineJExact(&q).Float64(); f != want {
+			t.Fatalf("%v, off by nearly %g: %g, exact %g", q, bound, f, want)
+		}
+	}
+	if taken[0] < 1000 || taken[1] < 1000 || refused[0] < 100 {
+		t.Errorf("taken %v, refused %v", taken, refused)
+	}
+}
