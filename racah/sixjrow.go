@@ -102,8 +102,5 @@ func (k *tetrad) byRow(negative bool) (f float64, ok bool) {
 	i := (member - rec.First) / 2
 	v := dd.Pair{Hi: x[i], Lo: low[i]}
 	bound := rec.Error(x, low, weight, sixJGap(opposite)) / math.Sqrt(weight*float64(member+1)) / math.Abs(v.Hi)
-	if !(bound < 0x1p-60) {
-		return 0, false
-	}
-	return v.Scale(0, negative).Round(float64(bound*(1+0x1p-20)) + 0x1p-100)
+	return row.Round(v.Scale(0, negative), bound)
 }

@@ -85,11 +85,8 @@ func (r *regge) byRow(coefficient bool) (f float64, ok bool) {
 	k := (twiceJ(c) - rec.First) / 2
 	v := dd.Pair{Hi: x[k], Lo: low[k]}
 	bound := rec.Error(x, low, 1, threeJGap) / math.Sqrt(float64(twiceJ(c)+1)) / math.Abs(v.Hi)
-	if !(bound < 0x1p-60) {
-		return 0, false
-	}
 	if coefficient {
 		v = v.Mul(dd.Sqrt(r.twiceJ3()+1)).Scale(0, r.parity() != 0)
 	}
-	return v.Round(float64(bound*(1+0x1p-20)) + 0x1p-100)
+	return row.Round(v, bound)
 }

@@ -241,6 +241,15 @@ func root(a dd.Pair) dd.Pair {
 	return dd.Pair{Hi: q, Lo: (math.FMA(-q, q, a.Hi) + a.Lo) / (2 * q)}.Normal()
 }
 
+// Round returns the float64 nearest to a member that is off by bound, relative to it, at the most, and by 2^-101
+// more. ok is false where that leaves two possibilities, and for bounds from 2^-60, which would do so often.
+func Round(v dd.Pair, bound float64) (f float64, ok bool) {
+	if !(bound < 0x1p-60) {
+		return 0, false
+	}
+	return v.Round(float64(bound*(1+0x1p-20)) + 0x1p-100)
+}
+
 // Slice returns dst with n members, or a new slice where its capacity does not suffice.
 func Slice(dst []float64, n int) []float64 {
 	if cap(dst) < n {
