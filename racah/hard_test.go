@@ -11,6 +11,7 @@ import (
 	"strings"
 	"testing"
 
+	"example.org/couplet/internal/binsum"
 	"example.org/couplet/internal/dd"
 	"example.org/couplet/internal/mantissa"
 	"example.org/couplet/internal/published"
@@ -171,8 +172,12 @@ func drawHardNineJ(r *rand.Rand) (q []int, p dd.Pair, ok bool) {
 	if nineJSmallFront(&t).Words() > 2 {
 		return nil, p, false
 	}
-	high, low, ok := nineJMod128(&t)
-	return t[:], nineJLargeFront(&t).Mul(dd.Scaled{Pair: dd.FromMod128(high, low).Normal()}).Pair, ok
+	sum, negative := nineJSum(&t, new(binsum.ProductRoom))
+	if len(sum) == 0 {
+		return nil, p, false
+	}
+	high, low, exp := binsum.Leading(sum)
+	return t[:], nineJLargeFront(&t).Mul(dd.Scaled{Pair: dd.FromWords(high, low).Normal().Scale(0, negative), Exp: exp}).Pair, true
 }
 
 func (kind hardKind) search(t *testing.T, draws int) {

@@ -34,10 +34,7 @@ func nineJFloat(t *square.Array) float64 {
 	if antisymmetric(t) {
 		return 0
 	}
-	f, ok := nineJByLadders(t)
-	if !ok {
-		f, ok = nineJFewWords(t)
-	}
+	f, ok := nineJByChains(t)
 	if !ok {
 		f, ok = nineJByRows(t)
 	}
@@ -51,7 +48,7 @@ func nineJFloat(t *square.Array) float64 {
 	return nineJExact(t).Float64()
 }
 
-// Limits to the lengths of ladders that are summed up exactly, and of any; and, in halves, to the sum of the
+// Limits to the lengths of chains that are summed up exactly, and of any; and, in halves, to the sum of the
 // momenta where it is tried exactly: a calibration, most succeed below and few above.
 const (
 	mostWords    = 24
@@ -59,15 +56,15 @@ const (
 	exactMomenta = 108
 )
 
-// nineJByLadders is the route for symbols whose triads are in the tables: the sum over x, from the ladders of
-// the three 6j symbols, times the six triangle coefficients in double-double. ok is false where the rounding
-// stays open: for zeros, of those that are not summed up exactly, and close to boundaries.
-func nineJByLadders(t *square.Array) (f float64, ok bool) {
-	var ladders [3]ladder
-	nineJLadders(&ladders, t)
+// nineJByChains is the route for symbols whose triads are in the tables: the sum over x, from the chains of
+// the three 6j symbols, times the six triangle coefficients. ok is false where the rounding stays open: for
+// zeros, of those that are not summed up exactly, and close to boundaries.
+func nineJByChains(t *square.Array) (f float64, ok bool) {
+	var chains [3]chain
+	nineJChains(&chains, t)
 	longest, largest := 0, 0
-	for k := range ladders {
-		l := &ladders[k]
+	for k := range chains {
+		l := &chains[k]
 		if !l.reaches() {
 			return 0, false
 		}
@@ -80,10 +77,10 @@ func nineJByLadders(t *square.Array) (f float64, ok bool) {
 	first, last := nineJRange(t)
 	sum, bound, ok := dd.Pair{}, 0.0, false
 	if longest <= mostWords && largest <= exactMomenta {
-		sum, ok = laddersExact(&ladders, first, last)
+		sum, ok = chainsExact(&chains, first, last)
 	}
 	if !ok {
-		sum, bound = laddersPair(&ladders, first, last)
+		sum, bound = chainsPair(&chains, first, last)
 	}
 	if sum.Hi == 0 {
 		return 0, ok
@@ -108,23 +105,23 @@ func nineJRound(t *square.Array, sum dd.Pair, bound float64) (f float64, ok bool
 	return nineJLargeFront(t).Mul(dd.Scaled{Pair: sum}).Round(bound + largeError)
 }
 
-// nineJLadders sets the ladders of the three symbols of nineJFactors.
-func nineJLadders(l *[3]ladder, t *square.Array) {
+// nineJChains sets the chains of the three symbols of nineJFactors.
+func nineJChains(l *[3]chain, t *square.Array) {
 	l[0].set(t[0], t[8], t[5], t[1], t[2]) // { a b c; f i x }
 	l[1].set(t[1], t[5], t[3], t[7], t[4]) // { d e f; b x h }
 	l[2].set(t[7], t[3], t[0], t[8], t[6]) // { g h i; x a d }
 }
 
-// laddersExact returns Σ (2x+1) S1 S2 S3; ok is false where a sum or the total is too large.
-func laddersExact(ladders *[3]ladder, first, last int) (sum dd.Pair, ok bool) {
+// chainsExact returns Σ (2x+1) S1 S2 S3; ok is false where a sum or the total is too large.
+func chainsExact(chains *[3]chain, first, last int) (sum dd.Pair, ok bool) {
 	var sums [3][mostWords]float64
-	for k := range ladders {
-		l := &ladders[k]
+	for k := range chains {
+		l := &chains[k]
 		if !l.words(sums[k][:l.n]) {
 			return dd.Pair{}, false
 		}
 	}
-	i, j, k := (first-ladders[0].first)/2, (first-ladders[1].first)/2, (first-ladders[2].first)/2
+	i, j, k := (first-chains[0].first)/2, (first-chains[1].first)/2, (first-chains[2].first)/2
 	var high, low uint64
 	magnitude := 0.0
 	for x := first; x <= last; x += 2 {
@@ -139,16 +136,16 @@ func laddersExact(ladders *[3]ladder, first, last int) (sum dd.Pair, ok bool) {
 	return dd.FromMod128(high, low), magnitude < 0x1p126
 }
 
-// laddersPair returns the same sum in double-double and a bound of its relative error: the roundings of the
+// chainsPair returns the same sum in double-double and a bound of its relative error: the roundings of the
 // sum add 10 of Σ |(2x+1) S1 S2 S3| for each term.
-func laddersPair(ladders *[3]ladder, first, last int) (sum dd.Pair, bound float64) {
+func chainsPair(chains *[3]chain, first, last int) (sum dd.Pair, bound float64) {
 	var product, other [mostPairs]bounded
 	n := (last-first)/2 + 1
-	l := &ladders[0]
+	l := &chains[0]
 	l.pairs(product[:l.n])
 	terms := product[(first-l.first)/2:][:n]
-	for k := range ladders[1:] {
-		l := &ladders[1+k]
+	for k := range chains[1:] {
+		l := &chains[1+k]
 		l.pairs(other[:l.n])
 		factors := other[(first-l.first)/2:][:n]
 		for i := range terms {
@@ -163,27 +160,6 @@ func laddersPair(ladders *[3]ladder, first, last int) (sum dd.Pair, bound float6
 	}
 	bound += float64(float64(10*n) * total.Magnitude)
 	return total.Value, float64(1.01*uu*bound) / math.Abs(total.Value.Hi) // 1.01 for the roundings here
-}
-
-// nineJFewWords is the route for symbols that the ladders leave open, zeros mainly, and whose sum fits into two
-// words; ok is false where it need not. The front, at least 2^Exp, tells that |S| <= 1/front is below 2^126.
-func nineJFewWords(t *square.Array) (f float64, ok bool) {
-	if nineJTop(t) > dd.BinomialTops {
-		return 0, false
-	}
-	front := nineJLargeFront(t)
-	if front.Exp < -125 {
-		return 0, false
-	}
-	high, low, ok := nineJMod128(t)
-	if !ok {
-		return 0, false
-	}
-	s := dd.FromMod128(high, low)
-	if s.Hi == 0 {
-		return 0, true
-	}
-	return front.Mul(dd.Scaled{Pair: s.Normal()}).Round(largeError)
 }
 
 // How far M of the product of nineJSmallFront and the sum may be above and below that of the true value. Twelve
@@ -204,32 +180,6 @@ func nineJSmallFront(t *square.Array) mantissa.Number {
 	}
 	rows := triad(t[0], t[1], t[2]).Mul(triad(t[3], t[4], t[5])).Mul(triad(t[6], t[7], t[8]))
 	return rows.Mul(triad(t[0], t[3], t[6]).Mul(triad(t[1], t[4], t[7])).Mul(triad(t[2], t[5], t[8])))
-}
-
-// nineJMod128 returns the sum of nineJSum modulo 2^128, where the tables of binomials reach far enough.
-func nineJMod128(t *square.Array) (high, low uint64, ok bool) {
-	first, last := nineJRange(t)
-	var k [3]tetrad
-	for x := first; x <= last; x += 2 {
-		h, l := uint64(0), uint64(x+1)
-		nineJFactors(&k, t, x)
-		for i := range k {
-			if !k[i].Fits() {
-				return 0, 0, false
-			}
-			if v, ok := k[i].Word(); ok {
-				h, l = binsum.Mul128(h, l, uint64(v>>63), uint64(v))
-			} else {
-				sh, sl := k[i].Mod128()
-				h, l = binsum.Mul128(h, l, sh, sl)
-			}
-		}
-		high, low = binsum.Add128(high, low, h, l)
-	}
-	if first&1 != 0 {
-		high, low = binsum.Negate128(high, low)
-	}
-	return high, low, true
 }
 
 // rowMembers is how long rows may be without allocation: 2j to 200.

@@ -26,8 +26,9 @@ func ThreeJFloat(j1, j2, j3, m1, m2, m3 rational.Half) float64 {
 }
 
 // ClebschGordanFloat returns the float64 nearest to the coefficient of [ClebschGordan], to even on a
-// tie, whatever its size. Zeros and panics are those of ClebschGordan. It allocates nothing while
-// j1+j2+j <= 300.
+// tie, whatever its size. Zeros and panics are those of ClebschGordan; a value below the subnormal numbers
+// becomes a zero with its sign. It allocates nothing while j1+j2+j <= 300, but for tables that are built by the
+// first calls.
 func ClebschGordanFloat(j1, m1, j2, m2, j, m rational.Half) float64 {
 	var r regge
 	if !r.set(j1, j2, j, m1, m2, m.Neg()) {

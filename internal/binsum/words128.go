@@ -24,7 +24,7 @@ func mulWords(a, b, c uint64) (high, low uint64) {
 // negated returns (-1)^n times a number of two words modulo 2^128.
 func negated(high, low uint64, n int) (h, l uint64) {
 	if n&1 != 0 {
-		return Negate128(high, low)
+		return sub128(0, 0, high, low)
 	}
 	return high, low
 }
@@ -42,6 +42,3 @@ func sub128(ah, al, bh, bl uint64) (high, low uint64) {
 	high, _ = bits.Sub64(ah, bh, borrow)
 	return high, low
 }
-
-// Negate128 returns the negative of a number of two words modulo 2^128.
-func Negate128(high, low uint64) (h, l uint64) { return sub128(0, 0, high, low) }

@@ -13,16 +13,16 @@ import (
 	"example.org/couplet/wigner"
 )
 
-// compareLadder demands the sums of the ladder {p q x; r s t} as Racah's sum gives them: those in words
+// compareChain demands the sums of the chain {p q x; r s t} as Racah's sum gives them: those in words
 // exactly, those in double-double within their bounds. It returns the largest error in units of its bound; ok is
 // false where one of the triads without x is forbidden, or there is no x.
-func compareLadder(t *testing.T, p, q, r, s, u int) (exact bool, worst float64, ok bool) {
+func compareChain(t *testing.T, p, q, r, s, u int) (exact bool, worst float64, ok bool) {
 	t.Helper()
 	h := rational.Halves
 	if wigner.Triad(h(p), h(s), h(u)) != wigner.NonZero || wigner.Triad(h(r), h(q), h(u)) != wigner.NonZero {
 		return false, 0, false
 	}
-	var l ladder
+	var l chain
 	if l.set(p, q, r, s, u); l.n < 1 || !l.reaches() {
 		return false, 0, false
 	}
@@ -51,8 +51,8 @@ func compareLadder(t *testing.T, p, q, r, s, u int) (exact bool, worst float64, 
 	return exact, worst, true
 }
 
-// Every ladder of small momenta, and random ones up to where the tables end.
-func TestLadders(t *testing.T) {
+// Every chain of small momenta, and random ones up to where the tables end.
+func TestChains(t *testing.T) {
 	const top = 8
 	cases := 0
 	var q [5]int
@@ -64,7 +64,7 @@ func TestLadders(t *testing.T) {
 			}
 			return
 		}
-		exact, _, ok := compareLadder(t, q[0], q[1], q[2], q[3], q[4])
+		exact, _, ok := compareChain(t, q[0], q[1], q[2], q[3], q[4])
 		if ok {
 			cases++
 		}
@@ -80,7 +80,7 @@ func TestLadders(t *testing.T) {
 		for i := range q {
 			q[i] = r.IntN(size + 1)
 		}
-		exact, off, ok := compareLadder(t, q[0], q[1], q[2], q[3], q[4])
+		exact, off, ok := compareChain(t, q[0], q[1], q[2], q[3], q[4])
 		if !ok {
 			continue
 		}
@@ -93,7 +93,7 @@ func TestLadders(t *testing.T) {
 			break
 		}
 	}
-	t.Logf("%d small ladders, %d larger ones, %d of them exact; errors up to %.3f of the bound", cases, large, words, worst)
+	t.Logf("%d small chains, %d larger ones, %d of them exact; errors up to %.3f of the bound", cases, large, words, worst)
 	if cases < 4000 || large < 3000 || words < large/4 || words > large*3/4 {
 		t.Error("the draw misses")
 	}
@@ -137,7 +137,7 @@ func drawArray(r *rand.Rand, size int) (q square.Array) {
 
 // The products and sums keep within their bounds, too: what a bound misses, the rounding of the whole would
 // show only by chance.
-func TestLaddersPair(t *testing.T) {
+func TestChainsPair(t *testing.T) {
 	r := rand.New(rand.NewPCG(33, 33))
 	worst, cases, exacts := 0.0, 0, 0
 	for cases < 2000 {
@@ -145,21 +145,21 @@ func TestLaddersPair(t *testing.T) {
 		if cases == 0 {
 			q = square.Array{6, 25, 27, 21, 2, 19, 23, 23, 26} // 2x+1 times a sum is beyond 2^53
 		}
-		var l [3]ladder
-		nineJLadders(&l, &q)
+		var l [3]chain
+		nineJChains(&l, &q)
 		if max(l[0].n, l[1].n, l[2].n) > mostPairs || !l[0].reaches() || !l[1].reaches() || !l[2].reaches() {
 			continue
 		}
 		cases++
 		first, last := nineJRange(&q)
-		sum, bound := laddersPair(&l, first, last)
+		sum, bound := chainsPair(&l, first, last)
 		words, negative := nineJSum(&q, new(binsum.ProductRoom))
 		z := new(big.Int).SetBits(words)
 		if negative != (first&1 != 0) {
 			z.Neg(z)
 		}
 		if max(l[0].n, l[1].n, l[2].n) > mostWords {
-		} else if exact, ok := laddersExact(&l, first, last); ok {
+		} else if exact, ok := chainsExact(&l, first, last); ok {
 			exacts++
 			f := new(big.Float).SetPrec(2000).SetFloat64(exact.Hi)
 			f.Add(f, new(big.Float).SetPrec(2000).SetFloat64(exact.Lo))
@@ -191,34 +191,6 @@ func TestBoundedMul(t *testing.T) {
 	p, s := bounded{dd.Pair{}, 0x1p60}, bounded{dd.Pair{}, 0x1p70}
 	if p.mul(&s); p.err < 0x1p130*uu || p.err > 0x1p131*uu {
 		t.Errorf("error %g, want %g", p.err, 0x1p130*uu)
-	}
-}
-
-// Two words hold the sum where nineJFewWords takes them to: with fronts on both sides of its limit.
-func TestNineJFewWords(t *testing.T) {
-	r := rand.New(rand.NewPCG(39, 39))
-	taken, left := 0, 0
-	try := func(q square.Array) {
-		exp := nineJLargeFront(&q).Exp
-		f, ok := nineJFewWords(&q)
-		switch {
-		case !ok && exp < -125 && exp > -146:
-			left++
-		case ok && exp < -105:
-			taken++
-			fallthrough
-		case ok:
-			if want := nineJExact(&q).Float64(); f != want {
-				t.Fatalf("%v: %g, exact %g", q, f, want)
-			}
-		}
-	}
-	try(square.Array{62, 62, 0, 62, 0, 62, 124, 62, 62})
-	for range 4000 {
-		try(drawArray(r, 30))
-	}
-	if taken < 50 || left < 50 {
-		t.Errorf("%d close below the limit, %d close above it", taken, left)
 	}
 }
 

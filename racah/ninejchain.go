@@ -6,7 +6,7 @@ import (
 	"example.org/couplet/internal/dd"
 )
 
-// ladder is the recurrence in x for the sums S(x) of the 6j symbols {p q x; r s t}, with the triad (p q x)
+// chain is the recurrence in x for the sums S(x) of the 6j symbols {p q x; r s t}, with the triad (p q x)
 // in front as in [SixJ]. It is DLMF (34.5.11) in the form of newSixJRow, of which the roots are gone with the
 // triangle coefficients that S does not have:
 //
@@ -14,16 +14,16 @@ import (
 //	f(J) = (J^2-C) (B-J^2),    g(J) = (J^2-A) (D-J^2)
 //
 // All of these are integers, S too, and at both ends S is a product of binomials.
-type ladder struct {
+type chain struct {
 	p, q, r, s, t int // twice the momenta
 	first, n      int // J of the first sum, and how many there are
 	a, b, c, d    float64
 	c0, c1        float64
 }
 
-// set starts the ladder of {p q x; r s t}, from twice the momenta. While these are below 2^8 all numbers in the
+// set starts the chain of {p q x; r s t}, from twice the momenta. While these are below 2^8 all numbers in the
 // recurrence are below 2^52.
-func (l *ladder) set(p, q, r, s, t int) {
+func (l *chain) set(p, q, r, s, t int) {
 	casimir := func(n int) int { return n * (n + 2) }
 	square := func(n int) float64 { return float64(n * n) }
 	l.p, l.q, l.r, l.s, l.t = p, q, r, s, t
@@ -36,7 +36,7 @@ func (l *ladder) set(p, q, r, s, t int) {
 }
 
 // factors returns the three factors of the recurrence, exactly; for J = 0 without their factor J.
-func (l *ladder) factors(J float64) (above, here, below float64) {
+func (l *chain) factors(J float64) (above, here, below float64) {
 	jj, next := float64(J*J), float64((J+2)*(J+2))
 	above = float64(J * float64((next-l.c)*(l.b-next)))
 	below = float64((J + 2) * float64((jj-l.a)*(l.d-jj)))
@@ -49,13 +49,13 @@ func (l *ladder) factors(J float64) (above, here, below float64) {
 
 // reaches reports whether the table of binomials reaches the ends: where there is one term, t is not above
 // the sum of p, q, r, s.
-func (l *ladder) reaches() bool {
+func (l *chain) reaches() bool {
 	return (int64(l.p)+int64(l.q)+int64(l.r)+int64(l.s))/2+1 < dd.BinomialTops
 }
 
 // end returns the places of the four binomials in the sum at one of the ends, where it has one term, and its
 // sign: those of setMomenta, with twice x for c.
-func (l *ladder) end(x int) (h, i, j, k int, sign float64) {
+func (l *chain) end(x int) (h, i, j, k int, sign float64) {
 	total, s1, s2, s3 := (l.p+l.q+x)>>1, (l.r+l.s+x)>>1, (l.p+l.s+l.t)>>1, (l.r+l.q+l.t)>>1
 	t := max(total, s1, s2, s3)
 	return dd.Place(t+1, total+1), dd.Place(total-x, t-s1), dd.Place(total-l.p, t-s2), dd.Place(total-l.q, t-s3), float64(1 - 2*(t&1))
@@ -66,9 +66,9 @@ func (l *ladder) end(x int) (h, i, j, k int, sign float64) {
 const mostWord = 1 << 49
 
 // words fills v with the sums, exactly; ok is false where one of them reaches mostWord. The first half
-// comes from below and the other from above, which is two chains of operations that do not wait for each
+// comes from below and the other from above, which is two rows of operations that do not wait for each
 // other.
-func (l *ladder) words(v []float64) (ok bool) {
+func (l *chain) words(v []float64) (ok bool) {
 	table := dd.Binomials()
 	end := func(x int) float64 {
 		h, i, j, k, sign := l.end(x)
@@ -116,7 +116,7 @@ type bounded struct {
 	err float64
 }
 
-// What the errors of numbers in a ladder are relative to them, with the room: that of a product of four exact
+// What the errors of numbers in a chain are relative to them, with the room: that of a product of four exact
 // binomials, and what a step adds.
 const (
 	endError  = 3*7 + 13
@@ -138,7 +138,7 @@ func (p *bounded) mul(s *bounded) {
 //	e(x+1) = { |d| [e(x) + 13 |S(x)|] + |(J+2) g| [e(x-1) + 13 |S(x-1)|] } / |J f| + 12 |S(x+1)|
 //
 // and err is e + 13 |S|, at the least.
-func (l *ladder) pairs(v []bounded) {
+func (l *chain) pairs(v []bounded) {
 	table := dd.Binomials()
 	end := func(x int) bounded {
 		h, i, j, k, sign := l.end(x)
